@@ -1,0 +1,78 @@
+import type { H3Event } from 'h3'
+import { may, type ProjectAction } from '#shared/utils/permissions'
+import type { ProjectRole } from '#shared/schemas/api'
+import type { Account } from '../database/queries/accounts'
+import { findPlate } from '../database/queries/plates'
+import { findProjectAccess } from '../database/queries/projects'
+import { findScheme } from '../database/queries/schemes'
+import { findStudyProject } from '../database/queries/studies'
+import { useDb } from './db'
+import { notFound, refusal } from './refusal'
+
+const UUID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i
+
+const ROLE_NAMES: Record<ProjectRole, string> = {
+  'engineer': 'scheme engineer', 'architect': 'architect', 'cost-planner': 'cost planner', 'checker': 'checker',
+}
+
+/** The account that is signed in; server/middleware put it there. */
+export function requireAccount(event: H3Event): Account {
+  const { account } = event.context
+  if (!account) throw refusal('not-signed-in', 'You are not signed in, or your session has ended. Sign in again.')
+  return account
+}
+
+/** A route parameter that is an id; what is none cannot exist. */
+function idOf(event: H3Event, what: string): string {
+  const id = getRouterParam(event, 'id')
+  if (!id || !UUID.test(id)) throw notFound(what)
+  return id
+}
+
+export interface Access { account: Account, projectId: string, role: ProjectRole }
+
+/** Whether one of `actions` is allowed; 403 with the role where none is. */
+function demand(role: ProjectRole, actions: readonly ProjectAction[]): void {
+  if (actions.some(action => may(role, action))) return
+  throw refusal('not-allowed', `On this project you are ${ROLE_NAMES[role]}; this is for others to do. Ask a scheme engineer of the project.`)
+}
+
+async function accessTo(event: H3Event, projectId: string, what: string, actions: readonly ProjectAction[]): Promise<Access> {
+  const account = requireAccount(event)
+  const access = await findProjectAccess(useDb(), account.id, projectId)
+  if (!access) throw notFound(what)
+  demand(access.role, actions)
+  return { account, projectId, role: access.role }
+}
+
+/** For routes under /api/projects/:id. */
+export async function requireProject(event: H3Event, ...actions: ProjectAction[]): Promise<Access> {
+  return await accessTo(event, idOf(event, 'project'), 'project', actions)
+}
+
+/** For routes under /api/plates/:id: the plate in its present version too. */
+export async function requirePlate(event: H3Event, ...actions: ProjectAction[]) {
+  requireAccount(event)
+  const plate = await findPlate(useDb(), idOf(event, 'plate'))
+  if (!plate) throw notFound('plate')
+  return { ...await accessTo(event, plate.projectId, 'plate', actions), plate }
+}
+
+/** For routes under /api/studies/:id. */
+export async function requireStudy(event: H3Event, ...actions: ProjectAction[]) {
+  requireAccount(event)
+  const studyId = idOf(event, 'study')
+  const projectId = await findStudyProject(useDb(), studyId)
+  if (!projectId) throw notFound('study')
+  return { ...await accessTo(event, projectId, 'study', actions), studyId }
+}
+
+/** For routes under /api/studies/:id/schemes/:key. */
+export async function requireScheme(event: H3Event) {
+  const { studyId } = await requireStudy(event, 'project.read')
+  const key = getRouterParam(event, 'key', { decode: true }) ?? ''
+  // PostgreSQL takes no NUL in a text.
+  const row = key.includes('\0') ? undefined : await findScheme(useDb(), studyId, key)
+  if (!row) throw notFound('scheme')
+  return { studyId, row }
+}

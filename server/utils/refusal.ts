@@ -1,0 +1,28 @@
+import { createError, type H3Error } from 'h3'
+import type { ApiErrorBody, ApiErrorCode } from '#shared/schemas/api'
+
+const STATUS: Record<ApiErrorCode, [number, string]> = {
+  'malformed': [400, 'Bad Request'],
+  'not-signed-in': [401, 'Unauthorized'],
+  'wrong-credentials': [401, 'Unauthorized'],
+  'not-allowed': [403, 'Forbidden'],
+  'foreign-origin': [403, 'Forbidden'],
+  'not-found': [404, 'Not Found'],
+  'stale-version': [409, 'Conflict'],
+  'cannot-be-framed': [422, 'Unprocessable Content'],
+  'too-many-tries': [429, 'Too Many Requests'],
+  'internal': [500, 'Internal Server Error'],
+  'not-ready': [503, 'Service Unavailable'],
+}
+
+/** The one shape of a refusal: a code of the closed list, a sentence, and where it lies. */
+export function refusal(code: ApiErrorCode, message: string, more: { path?: string } & Record<string, unknown> = {}): H3Error {
+  const [statusCode, statusMessage] = STATUS[code]
+  const data: ApiErrorBody & Record<string, unknown> = { code, message, ...more }
+  return createError({ statusCode, statusMessage, message, data })
+}
+
+/** 404 for what is missing and for what is not the asker's: the answer tells no difference. */
+export function notFound(what: string): H3Error {
+  return refusal('not-found', `This ${what} does not exist, or you are not one of its people. Ask the engineer of the project to add you.`)
+}

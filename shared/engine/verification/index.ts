@@ -1,0 +1,6 @@
+export { publishedChecks } from './published'
+export { steelBuildingsInEurope } from './steel-buildings-in-europe'
+export { resistanceTables } from './resistance-tables'
+export { criticalMoments } from './critical-moments'
+export { actionsAndService } from './actions-and-service'
+export type { PublishedCheck } from './types'

@@ -1,0 +1,13 @@
+/** What every job of a worker works with. */
+import type { Logger } from 'pino'
+import type { Db } from '~~/server/database/client'
+import type { SearchAnswer, SearchTask } from '../threads/search'
+
+export interface Worker {
+  db: Db
+  log: Logger
+  /** Runs the engine in a thread. Rejects where the thread died. */
+  search: (task: Omit<SearchTask, 'stop'>) => Promise<SearchAnswer>
+  /** Whether the study was ended from outside while this worker had a part of it. */
+  isEnded: (studyId: string) => boolean
+}
