@@ -103,7 +103,7 @@ export default withNuxt(
     },
   },
   ...engineRooms.flatMap((rooms, position) => rooms.map(room => engineRoom(room, position))),
-  arrow('shared', ['shared/{schemas,utils,types}/**/*.ts'],
+  arrow('shared', ['shared/{schemas,utils,types,optimise}/**/*.ts'],
     inside('app|server|workers|tests'), 'shared imports only from shared.'),
   arrow('app', ['app/**/*.{ts,vue}'],
     inside('server|workers|tests'), 'app imports from app and shared.'),

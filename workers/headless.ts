@@ -3,7 +3,7 @@
  * Bad input: exit code 2 and `{"error":{code,message,path}}` on standard error; an error of our own: the same with exit code 1.
  */
 import { EngineError } from '#shared/engine/errors'
-import { failureOf } from './headless/failure'
+import { failureOf, internalFailure } from './headless/failure'
 import type { Failure } from './headless/failure'
 import { members } from './headless/members'
 import { sections } from './headless/sections'
@@ -24,11 +24,6 @@ async function standardInput(): Promise<string> {
 function refuse({ code, message, path }: Failure, exitCode = 2): void {
   process.stderr.write(`${JSON.stringify({ error: { code, message, path } })}\n`)
   process.exitCode = exitCode
-}
-
-/** What is no fault of the input: still one object on standard error, but exit code 1. */
-function internalFailure(error: unknown): Failure {
-  return { code: 'internal', message: error instanceof Error ? `${error.name}: ${error.message}` : String(error), path: '' }
 }
 
 async function run(name: string | undefined): Promise<void> {

@@ -66,6 +66,7 @@ function anySizer(model: PlateModel): Sizer {
   return {
     rules: sizingRules(model, basisOf({ constructionStage: true })),
     staircase: beam => [{ section: CATALOGUE[Math.floor(beam.span) % CATALOGUE.length]!, utilisation: 0.5, governing: 'bending' }],
+    withinDepths: () => () => undefined,
     frequency: () => null,
   }
 }

@@ -163,6 +163,8 @@ function reasonBeforeSizing({ plate, basis }: StudyInput, xs: number[], ys: numb
 
 interface Tools {
   input: StudyInput
+  /** Sections that may be used; all of the families without it. */
+  offered?: ReadonlySet<Section>
   rules: BeamRules
   verdicts: Map<string, boolean[]>
   psi0: number
@@ -215,7 +217,7 @@ function sizeAll(tools: Tools, members: Member[], cap: number, capInterior: numb
     const sides = member.slab === null ? 0 : member.isEdge ? 1 : 2
     const flange = least === null || sides === 0 ? 0 : sides === 2 ? least : least - 30
     const mustTie = member.isTie || (member.slab === null && member.cladding === 0 && member.carries.length === 0)
-    const chosen = candidates.find((s, n) => passes[n]! && s.h <= (member.isEdge ? cap : Math.min(cap, capInterior)) && s.b >= flange
+    const chosen = candidates.find((s, n) => passes[n]! && (tools.offered?.has(s) ?? true) && s.h <= (member.isEdge ? cap : Math.min(cap, capInterior)) && s.b >= flange
       && (!mustTie || isTie(tools, s, member, role.grade)))
     if (!chosen) return null
     sections[m] = chosen
@@ -248,7 +250,8 @@ function columnMass(tools: Tools, members: Member[], { ends }: Sized, xs: number
   const { input: { plate, basis }, rules } = tools
   const sizer = columnSizer({
     choice: rules.choice, combinations: combinationFactors(rules.choice, basis.combination),
-    kinds: [{ category: plate.floorLoad.category, reducible: true }], grade: basis.column.grade, sections: sectionsOf(basis.column.families),
+    kinds: [{ category: plate.floorLoad.category, reducible: true }], grade: basis.column.grade,
+    sections: sectionsOf(basis.column.families).filter(s => tools.offered?.has(s) ?? true),
     storeys: plate.storeys, storeyHeight: plate.storeyHeight, liftStoreys: basis.liftStoreys, roof: plate.roof ?? null,
     reducesByStoreys: basis.reductions.storeys, ltbMethod: basis.ltbMethod, utilisationLimit: basis.utilisationLimit,
   })
@@ -377,4 +380,39 @@ export function bruteStudy(input: StudyInput): BruteStudy {
   const points = new Map(all.filter(s => !beaten(s)).map(s => [`${grams(s.mass)}/${s.depth}`, { mass: grams(s.mass) / 1000, depth: s.depth }]))
   result.front = [...points.values()].sort((a, b) => a.mass - b.mass)
   return result
+}
+
+/** Every choice of `size` of the sections. */
+function* choices(sections: readonly Section[], size: number): Generator<Section[]> {
+  if (size === 0) yield []
+  for (let n = 0; n + size <= sections.length && size > 0; n++) {
+    for (const rest of choices(sections.slice(n + 1), size - 1)) yield [sections[n]!, ...rest]
+  }
+}
+
+/**
+ * Least mass, kg of beams and columns, with at most `most` different sections: every choice of them
+ * tried, for beams and columns of different families. null where no choice serves every member.
+ */
+export function leastMassOfFew(input: StudyInput, direction: Axis, n: number, most: number): number | null {
+  const plain = toolsOf(input)
+  const [xs, ys] = [input.plate.gridX.map(l => l.at), input.plate.gridY.map(l => l.at)]
+  const members = membersOf(input, xs, ys, direction, n)
+  const beamSections = sectionsOf([...new Set([...input.basis.primary.families, ...input.basis.secondary.families])])
+  const columnSections = sectionsOf(input.basis.column.families)
+  let least = Infinity
+  for (let forBeams = 1; forBeams < most; forBeams++) {
+    const sizes = [...choices(beamSections, forBeams)].flatMap((offered) => {
+      const sized = sizeAll({ ...plain, offered: new Set(offered) }, members, Infinity, Infinity)
+      return sized ? [{ sized, mass: sized.sections.reduce((sum, s, m) => sum + s.mass * (members[m]!.to - members[m]!.from) / 1000, 0) }] : []
+    }).sort((a, b) => a.mass - b.mass)
+    for (const { sized, mass } of sizes) {
+      if (mass >= least) break
+      for (const offered of choices(columnSections, most - forBeams)) {
+        const columns = columnMass({ ...plain, offered: new Set(offered) }, members, sized, xs, ys, direction)
+        if (columns !== null) least = Math.min(least, mass + columns)
+      }
+    }
+  }
+  return least === Infinity ? null : least
 }

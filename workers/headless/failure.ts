@@ -36,3 +36,8 @@ export function failureOf(error: unknown, prefix = ''): Failure | null {
   if (error instanceof SyntaxError) return { code: 'invalid-json', message: error.message, path: '' }
   return null
 }
+
+/** What is no fault of the input: answered in the same form, with exit code 1. */
+export function internalFailure(error: unknown): Failure {
+  return { code: 'internal', message: error instanceof Error ? `${error.name}: ${error.message}` : String(error), path: '' }
+}

@@ -28,9 +28,10 @@ export function linesOfBays(bays: readonly number[], first = 0): number[] {
   return lines
 }
 
-/** "9.0 × 7.5 m bays": the commonest bay of each direction. */
+/** "9.0 × 7.5 m bays"; "mostly 9.0 × 7.5 m bays" where some differ: the commonest bay of each direction. */
 export function typicalBay(baysX: readonly number[], baysY: readonly number[]): string {
-  return `${metres(commonest(baysX))} × ${metres(commonest(baysY))} m bays`
+  const areAllAlike = new Set(baysX).size === 1 && new Set(baysY).size === 1
+  return `${areAllAlike ? '' : 'mostly '}${metres(commonest(baysX))} × ${metres(commonest(baysY))} m bays`
 }
 
 /** The length that stands most often; of equals the longer. */

@@ -53,7 +53,7 @@ export const UK: NationalChoice = Object.freeze({
   sources: {
     gammaM0: sourced(`${NA_1993}, NA.2.15, as applied in the ${TABLES}`),
     gammaM1: sourced(`${NA_1993}, NA.2.15, as applied in the ${TABLES}`),
-    eta: sourced('NA to BS EN 1993-1-5:2006, NA.2.4 (1.0 for all steels), as a public transcript quotes it'),
+    eta: sourced('NA to BS EN 1993-1-5:2006, NA.2.4 (1.0 for all steels), as a public copy quotes it'),
     yieldRule: sourced(`${NA_1993}, NA.2.4: nominal values of the product standard, as applied in the ${TABLES}`),
     gammaG: sourced(`${NA_1990}, Table NA.A1.2(B), quoted by a worked example (column, 10 storeys)`),
     gammaQ: sourced(`${NA_1990}, Table NA.A1.2(B), quoted by a worked example (column, 10 storeys)`),

@@ -16,8 +16,9 @@ export interface Situation {
 const ROOF_CATEGORY = 'H'
 
 /**
- * Floors leading with ψ0 on the roof, and with a roof the roof leading with ψ0 on the floors. αn goes
- * with the floors' leading value only, never with ψ0 (EN 1991-1-1 3.3.2(2), from memory).
+ * Floors leading with ψ0 on the roof, and with a roof the roof leading with the floors accompanying.
+ * An imposed load is reduced by αn or by ψ0, never by both (EN 1991-1-1 3.3.2(2), from memory):
+ * where it accompanies, the smaller of the two.
  */
 export function situationsOf(rules: ColumnRules): Situation[] {
   const { choice, kinds, roof } = rules
@@ -29,13 +30,13 @@ export function situationsOf(rules: ColumnRules): Situation[] {
   return rules.combinations.flatMap((combination: CombinationFactors): Situation[] => {
     const { name, permanent, variable, accompanying } = combination
     if (variable === 0) {
-      return [{ name, permanent, roofVariable: accompanying * roofPsi0, variable: kind => accompanying * psi0[kind]! }]
+      return [{ name, permanent, roofVariable: accompanying * roofPsi0, variable: (kind, floors) => accompanying * Math.min(psi0[kind]!, alpha(kind, floors)) }]
     }
     const floorsLead: Situation = {
       name, permanent, roofVariable: variable * roofPsi0, variable: (kind, floors) => variable * alpha(kind, floors),
     }
     if (!roof) return [floorsLead]
-    return [floorsLead, { name: `${name}, roof leading`, permanent, roofVariable: variable, variable: kind => variable * psi0[kind]! }]
+    return [floorsLead, { name: `${name}, roof leading`, permanent, roofVariable: variable, variable: (kind, floors) => variable * Math.min(psi0[kind]!, alpha(kind, floors)) }]
   })
 }
 

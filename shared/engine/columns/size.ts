@@ -4,6 +4,7 @@
  */
 import { cmLinear, interactionAnnexB } from '../ec3'
 import { GRAVITY } from '../materials'
+import { type NumberMap, numberMap } from '../numberKeys'
 import { across } from '../plate'
 import type { Section } from '../sections'
 import { type ColumnForces, type Situation, axialForce, bucklingLengths, forcesOn, situationsOf } from './actions'
@@ -42,25 +43,41 @@ export function columnSizer(rules: ColumnRules): ColumnSizer {
 }
 
 function sizerOn(bench: Bench): ColumnSizer {
-  const known = new Map<string, SizedColumn | null>()
+  const known = numberMap<SizedColumn | null>()
   return {
     bench,
     among: sections => sizerOn({ ...bench, rules: { ...bench.rules, sections: bench.rules.sections.filter(section => sections.includes(section)) } }),
     size(demand) {
-      const key = keyOf(demand)
-      const found = known.get(key)
-      if (found !== undefined) return found
-      const sized = sizeColumn(bench, demand)
-      known.set(key, sized)
-      return sized
+      addDemand(known, demand)
+      return known.end(() => sizeColumn(bench, demand))
     },
   }
 }
 
-function keyOf({ web, direct, ends, unheldFloors }: ColumnDemand): string {
-  const figures = ({ permanent, variable, area }: ColumnDemand['direct']) =>
-    [permanent, ...variable, area].map(value => value.toPrecision(10)).join(',')
-  return [web, unheldFloors.x, unheldFloors.y, figures(direct), ...ends.map(end => `${end.axis}${end.side},${figures(end)}`)].join('|')
+/** A demand as a row of numbers, of which the first nine figures count. */
+function addDemand(row: Pick<NumberMap<unknown>, 'begin' | 'add'>, { web, direct, ends, unheldFloors }: ColumnDemand): void {
+  const addFigures = ({ permanent, variable, area }: ColumnDemand['direct']) => {
+    row.add(nineFigures(permanent))
+    for (const value of variable) row.add(nineFigures(value))
+    row.add(nineFigures(area))
+  }
+  row.begin()
+  row.add(web === 'x' ? 0 : 1)
+  row.add(unheldFloors.x)
+  row.add(unheldFloors.y)
+  addFigures(direct)
+  for (const end of ends) {
+    row.add((end.axis === 'x' ? 0 : 2) + (end.side > 0 ? 1 : 0))
+    addFigures(end)
+  }
+}
+
+/** Splits a number (Dekker): to 33 of its 53 bits, which are nine figures. */
+const SPLIT = 2 ** 20 + 1
+
+function nineFigures(value: number): number {
+  const wide = SPLIT * value
+  return wide - (wide - value)
 }
 
 function sizeColumn(bench: Bench, demand: ColumnDemand): SizedColumn | null {

@@ -14,13 +14,10 @@ export function bendingResistance(W: number, fy: number, gammaM0: number): numbe
   return W * fy / gammaM0
 }
 
-/**
- * ρ = (2 VEd/Vpl,Rd − 1)² where VEd > 0.5 Vpl,Rd, else 0. EN 1993-1-1:2005 6.2.8(2), (3). N.
- * At most 1: beyond Vpl,Rd the web has nothing left to lose (the check of shear has failed by then).
- */
+/** ρ = (2 VEd/Vpl,Rd − 1)² where VEd > 0.5 Vpl,Rd, else 0. EN 1993-1-1:2005 6.2.8(2), (3). N. */
 export function highShearFactor(VEd: number, VplRd: number): number {
   const ratio = Math.abs(VEd) / VplRd
-  return ratio > 0.5 ? Math.min(1, (2 * ratio - 1) ** 2) : 0
+  return ratio > 0.5 ? (2 * ratio - 1) ** 2 : 0
 }
 
 /**
@@ -32,7 +29,15 @@ export function webModulus({ h, tw, tf }: Section, sectionClass: SectionClass): 
   return sectionClass <= 2 ? tw * hw * hw / 4 : tw * hw ** 3 / (6 * h)
 }
 
+/** What is left of W at least: far beyond Vpl,Rd (6.30) would give none or less, and no utilisation. */
+const LEAST_MODULUS = 1e-3
+
 /** My,V,Rd, Nmm: bending resistance beside high shear. EN 1993-1-1:2005 6.2.8, (6.30). Wweb of `webModulus`. */
 export function bendingResistanceWithShear(W: number, Wweb: number, rho: number, fy: number, gammaM0: number): number {
-  return (W - rho * Wweb) * fy / gammaM0
+  return Math.max(W - rho * Wweb, LEAST_MODULUS * W) * fy / gammaM0
+}
+
+/** VEd/Vpl,Rd from which on `bendingResistanceWithShear` falls no further. */
+export function exhaustingShear(W: number, Wweb: number): number {
+  return (1 + Math.sqrt((1 - LEAST_MODULUS) * W / Wweb)) / 2
 }

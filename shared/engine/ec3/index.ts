@@ -3,7 +3,7 @@ export {
   webClassInCompression, webStraightDepth,
 } from './classification'
 export type { SectionClass } from './classification'
-export { bendingModulus, bendingResistance, bendingResistanceWithShear, highShearFactor, webModulus } from './bending'
+export { bendingModulus, bendingResistance, bendingResistanceWithShear, exhaustingShear, highShearFactor, webModulus } from './bending'
 export {
   needsShearBucklingCheck, plasticShearResistance, shearArea, shearBucklingFactor, shearBucklingResistance, webSlenderness,
 } from './shear'

@@ -1,32 +1,31 @@
 /** Slab outside the panels: strips between a beam and a void's edge, and overhangs with their corners. */
 import {
   type Axis, type Interval, type Link, type PlateModel, type Rectangle, TOLERANCE, across, along, areaOf, bayBox,
-  baysBeside, distinctRising, nearestCrossing, overlaps, ownerBeyond, rectangleFrom, zoneAt,
+  baysBeside, distinctRising, intersection, nearestCrossing, overlaps, ownerBeyond, rectangleFrom, zoneAt,
 } from '../plate'
 import { type LoadBook, addStretch, addToColumn, beamOn, columnAt, nearestColumn } from './book'
 import { framingOfBay, slabSpanAxis } from './lines'
 import type { SlabContext } from './slab'
 import type { Rejected } from './types'
+import type { TrimStrip } from './openings'
 
-/** Strips along the slab's span load the beam that trims the void and do not hold it. */
+/** Strips along the slab's span load the beam that trims the void and do not hold it; bay by bay, since regions may differ. */
 export function takeTrimStrips(context: SlabContext, book: LoadBook): void {
   for (const strip of context.strips) {
-    if (!liesAlongSpan(context, strip.box, strip.axis)) continue
-    for (const piece of cutAtZones(context.model, strip.box)) {
-      const extent = along(piece, strip.axis)
-      loadBeam(context.model, book, strip.axis, strip.beamAt, extent, piece)
+    for (const part of partsAlongSpan(context, strip)) {
+      for (const piece of cutAtZones(context.model, part)) {
+        loadBeam(context.model, book, strip.axis, strip.beamAt, along(piece, strip.axis), piece)
+      }
     }
   }
 }
 
-function liesAlongSpan({ bays, arrangement, regionOf }: SlabContext, box: Rectangle, axis: Axis): boolean {
-  for (let i = 0; i < bays.full.length; i++) {
-    for (let j = 0; j < bays.full[i]!.length; j++) {
-      const framing = framingOfBay(arrangement, bays, regionOf, i, j)
-      if (framing && overlaps(bayBox(bays.grid, i, j), box)) return slabSpanAxis(framing) === axis
-    }
-  }
-  return false
+/** The parts of a strip in bays whose slab spans along it. */
+function partsAlongSpan({ bays, arrangement, regionOf }: SlabContext, { box, axis }: TrimStrip): Rectangle[] {
+  return bays.full.flatMap((column, i) => column.flatMap((_, j) => {
+    const framing = framingOfBay(arrangement, bays, regionOf, i, j)
+    return framing && slabSpanAxis(framing) === axis ? intersection(bayBox(bays.grid, i, j), box) ?? [] : []
+  }))
 }
 
 function loadBeam(model: PlateModel, book: LoadBook, axis: Axis, at: number, extent: Interval, piece: Rectangle): boolean {

@@ -20,15 +20,24 @@ export function loadBook(lines: readonly BeamLine[], columns: FrameColumn[], siz
   const indices = beams.map((_, index) => index)
   const byLine = (axis: Axis) => indices.filter(b => beams[b]!.axis === axis).sort((a, b) => beams[a]!.at - beams[b]!.at)
   const along = { x: byLine('x'), y: byLine('y') }
-  const ends = (axis: Axis) => distinctRising(along[axis].flatMap(b => [beams[b]!.from, beams[b]!.to]))
+  const ends = (axis: Axis) => {
+    const places = new Set<number>()
+    for (const b of along[axis]) places.add(beams[b]!.from).add(beams[b]!.to)
+    return distinctRising([...places])
+  }
   return { beams, columns, along, ends: { x: ends('x'), y: ends('y') }, size }
 }
 
 export function addStretch(book: LoadBook, beam: number, piece: Interval, load: readonly number[], factor: number, side: StretchLoad['side']): void {
-  const { from } = book.beams[beam]!
   const scaled = new Array<number>(book.size).fill(0)
   addScaled(scaled, load, factor)
-  book.beams[beam]!.stretches.push({ from: piece.from - from, to: piece.to - from, load: scaled, side })
+  putStretch(book, beam, piece, scaled, side)
+}
+
+/** The same with a load that is the stretch's own from now on. */
+export function putStretch(book: LoadBook, beam: number, piece: Interval, load: number[], side: StretchLoad['side']): void {
+  const { from, stretches } = book.beams[beam]!
+  stretches.push({ from: piece.from - from, to: piece.to - from, load, side })
 }
 
 export function addSpot(book: LoadBook, beam: number, at: number, load: readonly number[], factor: number): void {

@@ -138,7 +138,7 @@ export function beamDemand(beam: FrameBeam, loads: BeamLoads, reactions: readonl
   const points = distinctRising(beam.carries.map(carried => roundedPlace(carried.at)))
   const service = loadCase('in service', beam.held, points, loads, reactions, load => servicePart(load, factors))
   const construction = rules.constructionStage
-    ? [loadCase('construction stage', beam.heldInConstruction, points, loads, reactions, load => constructionPart(rules.kinds, load))]
+    ? [loadCase('all of the slab', beam.heldInConstruction, points, loads, reactions, load => constructionPart(rules.kinds, load))]
     : []
   return { span, selfWeight: true, service, construction }
 }
@@ -152,7 +152,7 @@ export function oneSidedCases(beam: FrameBeam, spots: readonly SpotLoad[], react
   return ([[-1, 'one side'], [1, 'the other side']] as const).map(([side, words]) => {
     const stretches = mergedStretches(beam.stretches.filter(stretch => stretch.side === side), rules.kinds.size)
     const loads: BeamLoads = { stretches, spots: [...spots] }
-    return loadCase(`construction stage, slab on ${words} only`, beam.heldInConstruction, points, loads, reactions, load => constructionPart(rules.kinds, load))
+    return loadCase(`slab on ${words} only`, beam.heldInConstruction, points, loads, reactions, load => constructionPart(rules.kinds, load))
   })
 }
 

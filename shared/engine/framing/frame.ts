@@ -41,7 +41,7 @@ export function frameArrangement(model: PlateModel, arrangement: Arrangement, ru
   const unsupported = findSupports(book)
   if (unsupported) return unsupported
   const order = loadOrder(book.beams)
-  if (!order) return { rejection: 'void-cuts-beam', detail: 'Beams carry each other in a circle where columns are omitted.' }
+  if (!order) return { rejection: 'void-cuts-beam', detail: 'Beams carry each other in a circle, round voids or where columns are omitted.' }
   markHolding(model, book, lines)
   const context = { model, bays, arrangement, regionOf, strips: trimmed.strips }
   const slab = takeSlab(context, book)
@@ -72,8 +72,15 @@ function columnsOf(
 
 /** Direction of the primary beams around a crossing; x where they differ. */
 function webAt(arrangement: Arrangement, bays: BayGrid, regionOf: number[][], i: number, j: number): Axis {
-  const isAlongY = (a: number, b: number) => framingOfBay(arrangement, bays, regionOf, a, b)?.direction !== 'x'
-  return isAlongY(i, j) && isAlongY(i - 1, j) && isAlongY(i, j - 1) && isAlongY(i - 1, j - 1) ? 'y' : 'x'
+  let web: Axis | null = null
+  for (let a = i - 1; a <= i; a++) {
+    for (let b = j - 1; b <= j; b++) {
+      const direction = framingOfBay(arrangement, bays, regionOf, a, b)?.direction
+      if (web && direction && web !== direction) return 'x'
+      web ??= direction ?? null
+    }
+  }
+  return web ?? 'x'
 }
 
 /** Primary direction of the region that a void lies in; of the first one where it lies in several. */

@@ -89,9 +89,15 @@ function takeOutlinePiece(context: SlabContext, book: LoadBook, edge: OutlineEdg
   }
   const [x, y] = edge.axis === 'x' ? [m, edge.at] : [edge.at, m]
   const column = nearestColumn(book, x, y)
-  if (column < 0) return false
+  if (column < 0 || !standsBefore(book.columns[column]!, edge, piece, limit)) return false
   addToColumn(book, column, load, piece.to - piece.from)
   return true
+}
+
+/** Whether a column is within the overhang limit of a whole piece of the edge. */
+function standsBefore(column: { x: number, y: number }, edge: OutlineEdge, piece: Interval, limit: number): boolean {
+  const [along, across] = edge.axis === 'x' ? [column.x, column.y] : [column.y, column.x]
+  return Math.abs(across - edge.at) < limit && Math.abs(along - piece.from) < limit && Math.abs(along - piece.to) < limit
 }
 
 /** An outer beam across the edge that the piece stands before between its ends, as at the short side of a step in the outline. */

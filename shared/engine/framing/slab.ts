@@ -8,10 +8,10 @@ import {
   type Axis, type BayGrid, type Interval, type LoadZoneModel, type PlateModel, TOLERANCE, across, addScaled, along,
   distinctRising, unionOf, withoutIntervals,
 } from '../plate'
-import { type LoadBook, addStretch, beamsCovering } from './book'
+import { type LoadBook, beamsCovering, putStretch } from './book'
 import { framingOfBay, slabSpanAxis } from './lines'
 import type { Arrangement, Rejected, StretchLoad } from './types'
-import type { TrimStrip } from './voids'
+import type { TrimStrip } from './openings'
 
 export interface SlabContext {
   model: PlateModel
@@ -171,7 +171,7 @@ function write(book: LoadBook, row: Row, beam: number, part: Interval, side: Str
     holds &&= zone.slab.fixedToTopFlange
     holdsInConstruction &&= zone.slab.fixedToTopFlange && zone.slab.system === 'deck'
   }
-  addStretch(book, beam, row.piece, load, 1, side)
+  putStretch(book, beam, row.piece, load, side)
   target.hasSlab = true
   const place = { from: row.piece.from - target.from, to: row.piece.to - target.from }
   if (holds) target.held.push(place)

@@ -1,5 +1,5 @@
 export { verifyBeam } from './verify'
-export { lightestSections, passingSections } from './lightest'
+export { lightestSections, sectionVerdicts } from './lightest'
 export { resistancesOf } from './resistances'
 export { prepareBeam } from './prepare'
 export type { PreparedBeam, PreparedCase, PreparedCombination } from './prepare'

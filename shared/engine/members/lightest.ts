@@ -161,16 +161,16 @@ export function lightestSections(
 }
 
 /**
- * Of the candidates those that pass, in their order: the verdicts and numbers of `verifyBeam`, only
- * sooner. Unlike the staircase it tells of deeper and heavier sections too.
+ * One section after another for a beam that is prepared once: null where it does not pass. The
+ * verdicts and numbers of `verifyBeam`, only sooner.
  */
-export function passingSections(
-  beam: Beam, candidates: readonly Section[], grade: Grade, rules: BeamRules, accept?: (section: Section) => boolean,
-): SizedSection[] {
+export function sectionVerdicts(
+  beam: Beam, grade: Grade, rules: BeamRules, accept?: (section: Section) => boolean,
+): (section: Section) => SizedSection | null {
   validateBeam(beam)
   validateRules(rules, grade)
   const prepared = prepareBeam(beam, rules)
-  return candidates.flatMap(section => lightestPrepared(prepared, [section], grade, rules, accept))
+  return section => lightestPrepared(prepared, [section], grade, rules, accept)[0] ?? null
 }
 
 /** The same on a beam prepared before. */

@@ -1,4 +1,4 @@
-import { bendingResistanceWithShear, highShearFactor } from '../ec3'
+import { bendingResistanceWithShear, exhaustingShear, highShearFactor } from '../ec3'
 import { momentIn } from '../statics'
 import type { Effects, Peak } from '../statics'
 import type { PreparedCase, PreparedCombination } from './prepare'
@@ -43,30 +43,17 @@ function consider(out: BendingResult, resistances: Resistances, gammaM0: number,
 }
 
 /**
- * Places inside a stretch of uniform load where M/My,V,Rd turns: with v = 2|V|/Vpl − 1, k = Wweb/W,
- * a = (Vpl/2)²/q and C = M + V²/(2q), which is constant on the stretch, d(M/My,V)/dv = 0 is
- * a k v² + (a + a k − 2 k C) v + a = 0.
+ * The place inside a stretch of uniform load from which on the shear leaves nothing to lose. There is no other
+ * largest M/My,V,Rd between the ends but at zero shear: with v = 2|V|/Vpl − 1, k = Wweb/W, a = (Vpl/2)²/q and
+ * C = M + V²/(2q), which is constant on the stretch, it turns where a k v² + (a + a k − 2 k C) v + a = 0. The
+ * product of the two places is 1/k: the first is a least value, the second lies where 1 − k v² has gone.
  */
-function considerInside(out: BendingResult, resistances: Resistances, gammaM0: number, x0: number, effects: Effects, i: number, h: number): void {
+function considerExhausted(out: BendingResult, resistances: Resistances, gammaM0: number, x0: number, effects: Effects, i: number, h: number): void {
   const { q, V } = effects
-  const half = resistances.VplRd / 2
-  const k = resistances.Wweb / resistances.W
-  const a = half * half / q[i]!
-  const C = effects.M[i]! + V[i]! * V[i]! / (2 * q[i]!)
-  const b = a + a * k - 2 * k * C
-  const root = b * b - 4 * a * a * k
-  const place = (shear: number) => {
-    for (const sign of [1, -1]) {
-      const s = (V[i]! - sign * shear) / q[i]!
-      if (s > 0 && s < h) consider(out, resistances, gammaM0, x0 + s, momentIn(effects, i, s), sign * shear)
-    }
-  }
-  place(half)
-  place(2 * half)
-  if (root < 0) return
-  for (const sign of [1, -1]) {
-    const v = (-b + sign * Math.sqrt(root)) / (2 * a * k)
-    if (v > 0 && v < 1) place(half * (1 + v))
+  const shear = resistances.VplRd * exhaustingShear(resistances.W, resistances.Wweb)
+  for (const signed of [shear, -shear]) {
+    const s = (V[i]! - signed) / q[i]!
+    if (s > 0 && s < h) consider(out, resistances, gammaM0, x0 + s, momentIn(effects, i, s), signed)
   }
 }
 
@@ -93,9 +80,7 @@ export function bendingAlong(
     if (q[i]! > 0) {
       const turn = V[i]! / q[i]!
       if (turn > 0 && turn < h) consider(out, resistances, gammaM0, x[i]! + turn, momentIn(effects, i, turn), 0)
-      if (Math.max(Math.abs(V[i]!), Math.abs(end)) > 0.5 * resistances.VplRd) {
-        considerInside(out, resistances, gammaM0, x[i]!, effects, i, h)
-      }
+      considerExhausted(out, resistances, gammaM0, x[i]!, effects, i, h)
     }
     consider(out, resistances, gammaM0, x[i + 1]!, M[i + 1]!, end)
   }

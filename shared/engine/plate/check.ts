@@ -74,6 +74,11 @@ function gridProblems(plate: Plate, key: 'gridX' | 'gridY'): PlateProblem[] {
   return problems
 }
 
+/** "Void Stair 1", but "Void 1" where the name says the kind already. */
+function called(kind: string, name: string): string {
+  return name.toLowerCase().startsWith(kind.toLowerCase()) ? name : `${kind} ${name}`
+}
+
 function middle(box: Rectangle): [number, number] {
   return [(box.x0 + box.x1) / 2, (box.y0 + box.y1) / 2]
 }
@@ -83,7 +88,7 @@ function voidProblems(model: PlateModel): PlateProblem[] {
   model.voids.forEach(({ name, box }, i) => {
     if (coveredArea(model.outline, box) < areaOf(box) * (1 - 1e-12)) {
       problems.push({
-        code: 'void', path: `voids[${i}]`, at: middle(box), message: `Void ${name} reaches outside the outline. Draw it within the slab.`,
+        code: 'void', path: `voids[${i}]`, at: middle(box), message: `${called('Void', name)} reaches outside the outline. Draw it within the slab.`,
       })
     }
     model.voids.slice(0, i).forEach((other) => {
@@ -104,7 +109,7 @@ function zoneProblems(model: PlateModel): PlateProblem[] {
   model.plate.zones.forEach((zone, i) => {
     const box = rectangleOf(zone)
     if (slabAreaWithin(model, box) <= 0) {
-      problems.push({ code: 'zone', path: `zones[${i}]`, at: middle(box), message: `Load zone ${zone.name} lies on no slab. Move it onto the plate or remove it.` })
+      problems.push({ code: 'zone', path: `zones[${i}]`, at: middle(box), message: `${called('Load zone', zone.name)} lies on no slab. Move it onto the plate or remove it.` })
     }
     model.plate.zones.slice(0, i).forEach((other) => {
       if (overlaps(rectangleOf(other), box)) {
@@ -142,7 +147,7 @@ function regionGridProblems(model: PlateModel, bays: BayGrid): PlateProblem[] {
       code: 'region', path: 'regions', at: middle(box),
       message: parts.length === 0
         ? `The bay at ${bayName(model.plate, bays.grid, i, j)} belongs to no region. Let the regions cover the plate.`
-        : `The edge of region ${parts[0]!.name} cuts the bay at ${bayName(model.plate, bays.grid, i, j)}. Regions meet on grid lines.`,
+        : `The edge of ${called('region', parts[0]!.name)} cuts the bay at ${bayName(model.plate, bays.grid, i, j)}. Regions meet on grid lines.`,
     })
   }))
   return problems
@@ -161,7 +166,7 @@ function lineLoadProblems(model: PlateModel): PlateProblem[] {
     if (on === 'outline') return
     if ('void' in on) {
       if (!model.voids.some(v => v.name === on.void)) {
-        problems.push({ code: 'line-load', path: `lineLoads[${i}].on.void`, message: `Line load ${line.name} stands on void ${on.void}, which is not on the plate.` })
+        problems.push({ code: 'line-load', path: `lineLoads[${i}].on.void`, message: `${called('Line load', line.name)} stands on ${called('void', on.void)}, which is not on the plate.` })
       }
       return
     }
@@ -170,12 +175,12 @@ function lineLoadProblems(model: PlateModel): PlateProblem[] {
     const at: [number, number] = [(ax + bx) / 2, (ay + by) / 2]
     const path = `lineLoads[${i}].on`
     if ((ax !== bx) === (ay !== by)) {
-      problems.push({ code: 'line-load', path, at, message: `Line load ${line.name} must run parallel to the grid and have a length.` })
+      problems.push({ code: 'line-load', path, at, message: `${called('Line load', line.name)} must run parallel to the grid and have a length.` })
       return
     }
     const off = lengthOffSlab(model, on.from, on.to)
     if (off > 0) {
-      problems.push({ code: 'line-load', path, at, message: `${off} mm of line load ${line.name} stand on no slab. Draw it on the plate and clear of voids.` })
+      problems.push({ code: 'line-load', path, at, message: `${off} mm of ${called('line load', line.name)} stand on no slab. Draw it on the plate and clear of voids.` })
     }
   })
   return problems

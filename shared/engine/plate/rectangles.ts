@@ -86,7 +86,7 @@ export function unionOf(intervals: readonly Interval[]): Interval[] {
 
 /** Rising numbers without repetitions (closer than the tolerance). */
 export function distinctRising(values: readonly number[]): number[] {
-  const rising = Float64Array.from(values).sort()
+  const rising = new Float64Array(values).sort()
   const distinct: number[] = []
   for (const value of rising) {
     const last = distinct[distinct.length - 1]

@@ -103,12 +103,9 @@ function leastMassLabels(
   const length = (b: number) => frame.beams[b]!.to - frame.beams[b]!.from
   const lowCosts = lows.map(b => depths.map(depth => length(b) * (stairs.get(b)!.find(s => s.section.h <= depth)?.section.mass ?? Infinity)))
   const highCosts = highs.map((b) => {
-    const demand = demandOf(b)
+    const lightest = sizer.withinDepths(demandOf(b), needs[b]!)
     const cap = capOf(frame.beams[b]!, caps)
-    return depths.map((depth) => {
-      const found = sizer.staircase(demand, { ...needs[b]!, depth }).find(s => s.section.h <= cap)
-      return length(b) * (found?.section.mass ?? Infinity)
-    })
+    return depths.map(depth => length(b) * (lightest(depth, cap)?.section.mass ?? Infinity))
   })
   const labels = leastCostLabels({
     costs: [...lowCosts, ...highCosts],

@@ -10,6 +10,7 @@ import type { PreparedStudy } from './prepare'
 import { rebuildScheme } from './rebuild'
 import { schemeRow } from './rows'
 import type { Scheme } from './schemes'
+import { tieUtilisation } from './sizer'
 import { ENGINE_VERSION } from './version'
 import { warningsOf } from './warnings'
 
@@ -57,7 +58,7 @@ function beamDetails(study: PreparedStudy, scheme: Scheme, gridX: NamedLine[], g
       mark: marks[b]!, kind: beam.kind, from, to, section: section.designation, governing, utilisation,
       place: beamPlace(beam, gridX, gridY),
       length, mass: section.mass * length / 1000, grade,
-      utilisations: verified.utilisation,
+      utilisations: { ...verified.utilisation, ...tieShare(study, scheme, b) },
       carriedBy: beam.supports.map(s => s.kind === 'column' ? columns[s.column]! : marks[s.beam]!),
       carries: beam.carries.map(carried => marks[carried.beam]!),
       reactions: { from: kiloNewtons(study, sized.reactions[b]![0]), to: kiloNewtons(study, sized.reactions[b]![1]) },
@@ -65,6 +66,11 @@ function beamDetails(study: PreparedStudy, scheme: Scheme, gridX: NamedLine[], g
       alike: alike[b]!,
     }
   })
+}
+
+function tieShare(study: PreparedStudy, { prepared: { needs }, sized }: Scheme, b: number): { tie?: number } {
+  const { tieForce: force, role } = needs[b]!
+  return force === 0 ? {} : { tie: tieUtilisation(sized.sections[b]!.section, sized.demands[b]!.span, force, study.sizer.rules, role) }
 }
 
 export function endsOf(beam: FrameBeam): [[number, number], [number, number]] {

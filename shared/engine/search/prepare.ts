@@ -46,11 +46,12 @@ export function prepareStudy(input: StudyInput): PreparedStudy {
   const models = slabsOf(input).map(slab => plateModel(plate, slab))
   refuse(checkGrid(models[0]!, arrangements.at(1).grid))
   const rules = sizingRules(models[0]!, basis)
+  const passing = passingBook(rules)
   return {
     input, arrangements, models,
     total: arrangements.count.total,
-    sizer: beamSizer(rules),
-    passing: passingBook(rules),
+    sizer: beamSizer(rules, passing),
+    passing,
     columns: columnSizer({
       choice: rules.choice, combinations: combinationFactors(rules.choice, basis.combination), kinds: models[0]!.kinds.variable,
       grade: basis.column.grade, sections: sectionsOf(basis.column.families), storeys: plate.storeys, storeyHeight: plate.storeyHeight,

@@ -61,12 +61,23 @@ export function completeScheme(
   return { arrangement, depthCap, prepared, sized, columns, mass, residual }
 }
 
-/** The reason where sections are missing: `no-section` if they are even without a cap. A cap beside the range's is to blame itself. */
+/**
+ * The reason where sections are missing: `depth-cap` if they are not without a cap, `buildability` if
+ * the flange width alone leaves none, else `no-section`. A cap beside the range's is to blame itself.
+ */
 function unsized(study: PreparedStudy, prepared: PreparedFrame, depthCap: number | null, detail: string): NoScheme {
   if (depthCap !== null) return { rejection: 'depth-cap', detail }
-  const free = sizeFrame(prepared, study.sizer, NO_CAPS)
-  const isCapToBlame = !isUnsized(free) && sizeColumns(study, prepared, free) !== null
-  return { rejection: isCapToBlame ? 'depth-cap' : 'no-section', detail }
+  if (isSizedFreely(study, prepared, prepared.needs)) return { rejection: 'depth-cap', detail }
+  if (study.input.basis.buildability.minFlangeWidth === null) return { rejection: 'no-section', detail }
+  const narrow = prepared.needs.map(need => ({ ...need, flangeWidth: 0 }))
+  return isSizedFreely(study, prepared, narrow)
+    ? { rejection: 'buildability', detail: `${detail} The least flange width leaves none.` }
+    : { rejection: 'no-section', detail }
+}
+
+function isSizedFreely(study: PreparedStudy, prepared: PreparedFrame, needs: PreparedFrame['needs']): boolean {
+  const free = sizeFrame(prepared, study.sizer, NO_CAPS, needs)
+  return !isUnsized(free) && sizeColumns(study, prepared, free) !== null
 }
 
 export function capsUnder(caps: Caps, depthCap: number | null): Caps {
@@ -145,17 +156,33 @@ export function schemesOf(study: PreparedStudy, arrangement: NumberedArrangement
   for (let scheme = lightest; ;) {
     const cap = nextCap(study, scheme, front)
     if (cap === null) return schemes
-    const next = sizeScheme(study, arrangement, prepared, cap)
+    const next = schemeUnderCap(study, arrangement, prepared, cap)
     if (isNoScheme(next)) return schemes
-    scheme = { ...next, depthCap: next.sized.depth }
+    scheme = next
     if (!front.admits(grams(next.mass.mass), next.sized.depth)) continue
     front.add(grams(next.mass.mass), next.sized.depth)
     schemes.push(scheme)
   }
 }
 
+/** The lightest scheme under a cap, named by its own depth; asked for again under that depth where sizes are searched, not proved. */
+function schemeUnderCap(study: PreparedStudy, arrangement: NumberedArrangement, prepared: PreparedFrame, cap: number): Scheme | NoScheme {
+  const scheme = sizeScheme(study, arrangement, prepared, cap)
+  if (isNoScheme(scheme)) return scheme
+  const { depth } = scheme.sized
+  if (!areSizesSearched(study) || depth === cap) return { ...scheme, depthCap: depth }
+  const again = schemeUnderCap(study, arrangement, prepared, depth)
+  return isNoScheme(again) ? scheme : again
+}
+
+/** For the frequency of the floor a lower cap may give a lighter scheme: then every cap is asked. */
+function areSizesSearched({ input: { basis } }: PreparedStudy): boolean {
+  return basis.limits.floorFrequency !== null
+}
+
 function nextCap(study: PreparedStudy, scheme: Scheme, front: Front): number | null {
   const below = study.depths.find(depth => depth < scheme.sized.depth)
   if (below === undefined) return null
+  if (areSizesSearched(study)) return below
   return Math.min(below, front.depthAtMostAsHeavy(grams(scheme.mass.mass)))
 }

@@ -8,7 +8,7 @@ import {
 import { GRAVITY } from '../materials'
 import type { Beam, SizedSection } from '../members'
 import { PERMANENT, type PlateModel, addScaled, appliedLoad } from '../plate'
-import { type NumberMap, numberMap } from './numberKeys'
+import { type NumberMap, numberMap } from '../numberKeys'
 import { type SectionNeeds, type Sizer, needsOf } from './sizer'
 
 /** A frame with what does not change while caps and sections do. */

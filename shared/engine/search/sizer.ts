@@ -10,7 +10,8 @@ import { E, GRAVITY, type Grade, yieldStrength } from '../materials'
 import { type Beam, type BeamRules, type LoadCase, type SizedSection, lightestSections } from '../members'
 import type { LoadZoneModel, PlateModel } from '../plate'
 import { type Section, sectionsOf } from '../sections'
-import { type NumberMap, numberMap } from './numberKeys'
+import { type NumberMap, numberMap } from '../numberKeys'
+import type { PassingBook } from './passing'
 import { effectsOf, fundamentalFrequency, largestSag, stationsOf } from '../statics'
 
 export type BasisRole = 'secondary' | 'primary'
@@ -86,11 +87,16 @@ export interface Sizer {
   rules: SizingRules
   /** Passing sections, mass rising, depth falling; empty where none passes. */
   staircase: (beam: Beam, needs: SectionNeeds) => readonly SizedSection[]
+  /**
+   * The lightest section not shallower than `least` and not deeper than `most`, mm, for as many such
+   * pairs as are asked; undefined where none passes.
+   */
+  withinDepths: (beam: Beam, needs: SectionNeeds) => (least: number, most: number) => SizedSection | undefined
   /** Hz under permanent load and the stated share of the variable load; null without load. `sized` is of the beam's staircase. */
   frequency: (beam: Beam, sized: SizedSection) => number | null
 }
 
-export function beamSizer(rules: SizingRules): Sizer {
+export function beamSizer(rules: SizingRules, book: PassingBook): Sizer {
   const stairs = numberMap<readonly SizedSection[]>()
   const frequencies = new WeakMap<SizedSection, number | null>()
   return {
@@ -98,7 +104,11 @@ export function beamSizer(rules: SizingRules): Sizer {
     staircase(beam, needs) {
       addBeam(stairs, beam, needs)
       return stairs.end(() =>
-        lightestSections(beam, rules.sections[needs.role], rules.grades[needs.role], withFrequency(rules.beam, needs), acceptance(beam, needs, rules)))
+        lightestSections(beam, rules.sections[needs.role], rules.grades[needs.role], withFrequency(rules.beam, needs), acceptance(beam, needs, rules))
+          .map(sized => asTie(sized, beam.span, needs, rules)))
+    },
+    withinDepths(beam, needs) {
+      return book.firstWithin(beam, needs, rules.sections[needs.role])
     },
     frequency(beam, sized) {
       const known = frequencies.get(sized)
@@ -178,9 +188,24 @@ export function acceptance(beam: Beam, needs: SectionNeeds, rules: SizingRules):
   }
 }
 
-function servesAsTie(section: Section, span: number, force: number, { choice, grades }: SizingRules, role: BasisRole): boolean {
+function servesAsTie(section: Section, span: number, force: number, rules: SizingRules, role: BasisRole): boolean {
+  return tieUtilisation(section, span, force, rules, role) <= 1
+}
+
+/** Largest of least depth, least radius and tie force against what the section has; Infinity where the grade is not offered. */
+export function tieUtilisation(section: Section, span: number, force: number, { choice, grades }: SizingRules, role: BasisRole): number {
   const fy = yieldStrength(grades[role], Math.max(section.tf, section.tw), choice.yieldRule)
-  return fy !== null && section.h >= Math.max(TIE_LEAST_DEPTH, span / TIE_SPAN_OVER_DEPTH)
-    && section.iz >= span / TIE_SPAN_OVER_RADIUS
-    && tensionResistance(section.A, fy, choice.gammaM0) >= force
+  if (fy === null) return Infinity
+  return Math.max(
+    Math.max(TIE_LEAST_DEPTH, span / TIE_SPAN_OVER_DEPTH) / section.h,
+    span / TIE_SPAN_OVER_RADIUS / section.iz,
+    force / tensionResistance(section.A, fy, choice.gammaM0),
+  )
+}
+
+/** A tie is governed by what ties are asked for where that uses it more than its loads do. */
+function asTie(sized: SizedSection, span: number, { tieForce: force, role }: SectionNeeds, rules: SizingRules): SizedSection {
+  if (force === 0) return sized
+  const utilisation = tieUtilisation(sized.section, span, force, rules, role)
+  return utilisation > sized.utilisation ? { ...sized, utilisation, governing: 'tie' } : sized
 }

@@ -14,32 +14,37 @@ function momentAt({ x, total }: CaseBasics, place: number): number {
   return momentIn(total, i, place - x[i]!)
 }
 
-/** Whether a load with a height acts inside the segment, and whether point loads prevail among them. */
-function heightOf({ x, combination: { qTop, PTop } }: CaseBasics, { from, to }: SegmentVerification): 'none' | 'line' | 'point' {
+/** C2 of pieces without end moments: uniform load (SN003); 1 … 5 equal loads, from the eigenvalue (engineering basis, section 6). */
+const C2_UNIFORM = 0.454
+const C2_BY_LOADS = [0.57, 0.5, 0.48, 0.47, 0.465]
+
+/** C2 for the loads with a height inside the segment, by what prevails among them; 0 where there is none. */
+function loadFactorC2({ x, combination: { qTop, PTop } }: CaseBasics, { from, to }: SegmentVerification): number {
   let line = 0
   let point = 0
+  let loads = 0
   for (let i = 0; i < x.length - 1; i++) {
     if (x[i]! >= from && x[i + 1]! <= to) line += qTop[i]! * (x[i + 1]! - x[i]!)
-    if (x[i]! > from && x[i]! < to) point += PTop[i]!
+    if (x[i]! > from && x[i]! < to && PTop[i]! > 0) {
+      point += PTop[i]!
+      loads++
+    }
   }
-  return line === 0 && point === 0 ? 'none' : line >= point ? 'line' : 'point'
+  if (line === 0 && point === 0) return 0
+  return line >= point ? C2_UNIFORM : C2_BY_LOADS[loads - 1] ?? C2_UNIFORM
 }
-
-/** Published C2 of pieces without end moments: uniform load; load in the middle (engineering basis, section 6). */
-const PUBLISHED_C2 = { none: 0, line: 0.454, point: 0.55 } as const
 
 /** The closed form beside the eigenvalue, with the difference stated. */
 function closedRow(basics: Basics, of: CaseBasics, segment: SegmentVerification): SheetRow {
   const L = segment.to - segment.from
   const quarter = (k: number) => momentAt(of, segment.from + L * k / 4)
   const C1 = c1QuarterPoints(segment.MEd, quarter(1), quarter(2), quarter(3))
-  const height = heightOf(of, segment)
+  const C2 = loadFactorC2(of, segment)
   const hasEndMoments = Math.max(Math.abs(quarter(0)), Math.abs(quarter(4))) > 1e-6 * segment.MEd
-  const C2 = PUBLISHED_C2[height]
-  const zg = height === 'none' || hasEndMoments ? 0 : basics.section.h / 2
+  const zg = C2 === 0 || hasEndMoments ? 0 : basics.section.h / 2
   const closed = criticalMomentClosed(basics.section, L, C1, C2, zg)
   const difference = 100 * (closed / segment.Mcr! - 1)
-  const leftOut = height !== 'none' && hasEndMoments ? '; z_{g} left out: no C_{2} for these moments' : ''
+  const leftOut = C2 > 0 && hasEndMoments ? '; z_{g} left out: no C_{2} for these moments' : ''
   return row({
     check: 'Closed form, for the eye',
     expression: zg === 0
@@ -55,7 +60,7 @@ function closedRow(basics: Basics, of: CaseBasics, segment: SegmentVerification)
 
 function criticalRows(basics: Basics, of: CaseBasics, segment: SegmentVerification): SheetRow[] {
   const L = segment.to - segment.from
-  const raised = heightOf(of, segment) !== 'none'
+  const raised = loadFactorC2(of, segment) > 0
   const height = !raised ? 'z_{g} = 0' : `z_{g} = +h/2 = ${num(basics.section.h / 2, 1)}`
   if (segment.C1 === null) {
     return [row({

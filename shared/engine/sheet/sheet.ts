@@ -13,6 +13,7 @@ import { serviceGroup } from './service-rows'
 import { choicesOf } from './sheet-choices'
 import { strengthRows } from './strength-rows'
 import type { CalculationSheet, SheetContext, SheetGroup, SheetReaction, SheetRow } from './types'
+import { tieGroups } from './tie-rows'
 import { whyNotLighter } from './why-not'
 import { checkName, designationText, governingSentence, worstConstruction } from './words'
 
@@ -92,6 +93,7 @@ function groupsOf(basics: Basics, context: SheetContext): SheetGroup[] {
     buckling,
     ...(others.length ? [{ title: 'Other combination', rows: others.map(summaryRow) }] : []),
     ...constructionGroups(basics, context),
+    ...tieGroups(basics, context),
     serviceGroup(basics),
     fireGroup(basics, context),
   ]

@@ -82,6 +82,8 @@ export interface SheetContext {
   overrides?: readonly Override[]
   /** ψfi,1 for the critical temperature (EN 1993-1-2 2.4.2); without it the sheet says "not given". */
   psiFire?: number
+  /** N; for beams that serve as ties only (EN 1991-1-7 A.5). */
+  tieForce?: number
 }
 
 export interface CalculationSheet {

@@ -69,6 +69,14 @@ describe.each(columns)('the calculation sheet of a column %s', (_name, rule, ask
     })
   })
 
+  it('takes the smaller or larger of the two forms of an interaction factor', () => {
+    for (const { check, substituted, resistance } of rows.filter(row => /^k_\{(yy|zz|zy)\}/.test(row.check))) {
+      const forms = substituted.split('; ').map(part => Number(part.split(' = ')[1]!.replaceAll('\u2009', '')))
+      const chosen = check.endsWith('larger') ? Math.max(...forms) : Math.min(...forms)
+      expect(resistance).toBe(`${check.split(',')[0]!} ${chosen.toFixed(4)}`)
+    }
+  })
+
   it('marks the governing row once and says its parts', () => {
     const governing = rows.filter(row => row.governs)
     expect(governing).toHaveLength(1)

@@ -1,6 +1,6 @@
 import { spawnSync } from 'node:child_process'
 import { describe, expect, it } from 'vitest'
-import { failureOf } from '~~/workers/headless/failure'
+import { failureOf, internalFailure } from '~~/workers/headless/failure'
 import { members } from '~~/workers/headless/members'
 import { sections } from '~~/workers/headless/sections'
 
@@ -42,6 +42,11 @@ describe('headless members', () => {
     ['a load that ends before its start', [{ ...member, line: [{ from: 5000, to: 4000, permanent: 1, variable: 1 }] }], 'invalid-value', '[0].line[0].to'],
     ['a missing value', [{ ...member, grade: undefined }], 'invalid-value', '[0].grade'],
     ['no array', member, 'invalid-value', ''],
+    ['a load of 1e308', [{ ...member, point: [{ at: 1, permanent: 1e308, variable: 0 }] }], 'invalid-value', '[0].point[0].permanent'],
+    ['a span of 1e308', [{ ...member, span: 1e308 }], 'invalid-value', '[0].span'],
+    ['a span of 1e-9', [{ ...member, span: 1e-9, line: [], point: [], restraint: { kind: 'none' } }], 'invalid-value', '[0].span'],
+    ['a hundred thousand loads', [{ ...member, point: Array.from({ length: 100_000 }, () => ({ at: 1, permanent: 1, variable: 1 })) }], 'invalid-value', '[0].point'],
+    ['a hundred thousand restraints', [{ ...member, restraint: { kind: 'points', at: Array.from({ length: 100_000 }, (_, i) => i / 100) } }], 'invalid-value', '[0].restraint.at'],
   ]
 
   it.each(wrong)('%s is refused by its path', (_name, document, code, path) => {
@@ -52,6 +57,15 @@ describe('headless members', () => {
       failure = failureOf(error)
     }
     expect(failure).toMatchObject({ code, path })
+  })
+})
+
+describe('an error of our own', () => {
+  it('is none of the input, and is answered in the same form', () => {
+    const error = new RangeError('out of room')
+    expect(failureOf(error)).toBeNull()
+    expect(internalFailure(error)).toEqual({ code: 'internal', message: 'RangeError: out of room', path: '' })
+    expect(internalFailure('words')).toEqual({ code: 'internal', message: 'words', path: '' })
   })
 })
 
@@ -66,12 +80,20 @@ describe('headless sections', () => {
 })
 
 describe('the headless command', () => {
-  const run = (name: string, input: string) => spawnSync('npm', ['run', '--silent', 'headless', '--', name], { input, encoding: 'utf8', timeout: 60_000 })
+  const run = (name: string, input: string | Buffer) => spawnSync('npm', ['run', '--silent', 'headless', '--', name], { input, encoding: 'utf8', timeout: 60_000 })
 
   it('writes one document on standard output and nothing else', () => {
     const { status, stdout, stderr } = run('members', JSON.stringify([member]))
     expect([status, stderr]).toEqual([0, ''])
     expect(JSON.parse(stdout)).toHaveLength(1)
+  }, 60_000)
+
+  it('refuses what is not UTF-8', () => {
+    const broken = Buffer.from(JSON.stringify([member]).replace('"a"', '"?"'))
+    broken[broken.indexOf('?')] = 0xff
+    const { status, stdout, stderr } = run('members', broken)
+    expect([status, stdout]).toEqual([2, ''])
+    expect(JSON.parse(stderr)).toEqual({ error: { code: 'invalid', message: 'The document is not valid UTF-8.', path: '' } })
   }, 60_000)
 
   it.each([['members', ''], ['members', '[{"id":'], ['sections', '{"a":1}'], ['nothing', '{}']])('%s with %j answers on standard error with code 2', (name, input) => {

@@ -3,7 +3,7 @@ import { applyOverrides, nationalChoice } from '#shared/engine/actions'
 import { criticalMomentUniform, ltbCurve, ltbReduction } from '#shared/engine/ec3'
 import { EngineError } from '#shared/engine/errors'
 import { lightestSections, verifyBeam } from '#shared/engine/members'
-import { findSection, sectionsOf } from '#shared/engine/sections'
+import { findSection, sectionProperties, sectionsOf } from '#shared/engine/sections'
 import { FREE, NO_LIMITS, beamOf, heldOver, line, point, rulesOf } from './beams'
 
 const UB = findSection('UB 457x191x67')!
@@ -112,6 +112,51 @@ describe('restraint of the compression flange', () => {
   })
 })
 
+describe('kc of f', () => {
+  const kc = (code: 'EN' | 'UK', points: ReturnType<typeof point>[], restraints: number[] = [], criticalMoment: 'by-segment' | 'whole-beam' = 'by-segment') =>
+    verifyBeam(
+      beamOf(6000, { point: points, restraint: { held: [], points: restraints } }, [], false), UB, 'S355',
+      rulesOf({ choice: nationalChoice(code), useF: true, criticalMoment }),
+    ).cases[0]!.segments.map(segment => segment.kc)
+
+  it('is 0.86 of Table 6.6 for a load in the middle, 1/√C1 for one beside it', () => {
+    expect(kc('EN', [point(3000, 30e3, 30e3)])).toEqual([0.86])
+    const [beside] = kc('EN', [point(2700, 30e3, 30e3)])
+    expect(beside).not.toBe(0.86)
+    expect(beside).toBeCloseTo(1 / Math.sqrt(1.36), 2)
+  })
+
+  it('is that of a linear diagram between restraints, whichever end has the larger moment', () => {
+    // held at mid-span under the load: from 0 to M and from M to 0, ψ = 0
+    expect(kc('EN', [point(3000, 30e3, 30e3)], [3000])).toEqual([1 / 1.33, 1 / 1.33])
+    // load at the second of two restraints: 0, M/2, M, 0 with ψ 0, 0.5, 0
+    expect(kc('EN', [point(4000, 30e3, 30e3)], [2000, 4000])).toEqual([1 / 1.33, 1 / (1.33 - 0.165), 1 / 1.33].map(value => expect.closeTo(value, 9)))
+  })
+
+  it('is 1 for a run with restraints inside, which are in Mcr', () => {
+    expect(kc('UK', [point(3000, 30e3, 30e3)], [3000], 'whole-beam')).toEqual([1])
+    expect(kc('UK', [point(3000, 30e3, 30e3)])[0]).toBeLessThan(0.87)
+  })
+})
+
+describe('what the section brings', () => {
+  it('takes fy by the thickest element, which is the flange', () => {
+    const { fy, cases } = verifyBeam(beamOf(6000, { line: [line(0, 6000, 10, 10)] }), findSection('UB 457x191x89')!, 'S355', rulesOf())
+    expect([fy, cases[0]!.McRd / 1e6]).toEqual([345, expect.closeTo(345 * findSection('UB 457x191x89')!.WplY / 1e6, 9)])
+  })
+
+  it('divides by γM0 in the section and by γM1 in buckling and in shear buckling', () => {
+    const { choice } = applyOverrides(nationalChoice('UK'), { gammaM0: 1.05, gammaM1: 1.2 })
+    const section = findSection('UB 762x267x134')!
+    const beam = beamOf(6000, { line: [line(0, 6000, 10, 10)] })
+    const [own, over] = [nationalChoice('UK'), choice].map(value => verifyBeam(beam, section, 'S355', rulesOf({ choice: value })).cases[0]!)
+    expect([own!.McRd / over!.McRd, own!.VplRd / over!.VplRd]).toEqual([expect.closeTo(1.05, 12), expect.closeTo(1.05, 12)])
+    const held = beamOf(6000, { line: [line(0, 6000, 10, 10)], restraint: heldOver(6000) })
+    expect(verifyBeam(held, section, 'S355', rulesOf({ choice })).cases[0]!.MbRd * 1.2).toBeCloseTo(section.WplY * 355, 3)
+    expect([own!.MbRd / over!.MbRd, own!.VbwRd! / over!.VbwRd!]).toEqual([expect.closeTo(1.2, 12), expect.closeTo(1.2, 12)])
+  })
+})
+
 describe('bending with high shear', () => {
   const short = beamOf(2400, { point: [point(1000, 200e3, 330e3)], restraint: heldOver(2400) }, [], false)
   const verified = verifyBeam(short, UB, 'S355', rulesOf({ limits: NO_LIMITS }))
@@ -126,6 +171,39 @@ describe('bending with high shear', () => {
     expect(view.bendingAt.x).toBe(1000)
     expect(view.bendingAt.rho).toBeCloseTo(rho, 12)
     expect(view.utilisation.bending).toBeCloseTo(V * 1000 / MvRd, 12)
+  })
+
+  it('looks at both sides of a load', () => {
+    const mirrored = beamOf(2400, { point: [point(1400, 200e3, 330e3)], restraint: heldOver(2400) }, [], false)
+    const other = verifyBeam(mirrored, UB, 'S355', rulesOf({ limits: NO_LIMITS })).cases[0]!
+    expect(other.bendingAt.x).toBe(1400)
+    expect(other.utilisation.bending).toBeCloseTo(view.utilisation.bending, 12)
+  })
+
+  it('finds the worst place where the shear leaves nothing of a section that is nearly all web', () => {
+    const section = sectionProperties({ family: 'UB', designation: 'test', mass: 70, h: 453, b: 80, tw: 20, tf: 6, r: 0 }, -1)
+    const w = 5600
+    const found = verifyBeam(
+      beamOf(800, { line: [line(0, 800, 0, w / 1.5)], restraint: heldOver(800) }, [], false), section, 'S355', rulesOf({ limits: NO_LIMITS }),
+    ).cases[0]!
+    let worst = 0
+    for (let i = 0; i <= 800_000; i++) {
+      const x = i / 1000
+      const V = Math.abs(w * (400 - x))
+      const rho = V > 0.5 * found.VplRd ? (2 * V / found.VplRd - 1) ** 2 : 0
+      const W = Math.max(section.WplY - rho * 441 * 441 * 20 / 4, section.WplY / 1000)
+      worst = Math.max(worst, w * x * (800 - x) / 2 / (W * 345))
+    }
+    expect(found.utilisation.bending / worst).toBeGreaterThan(1 - 1e-9)
+    expect(found.utilisation.bending / worst).toBeLessThan(1.01)
+  })
+
+  it('stays a number that rises with the load far beyond the resistance in shear', () => {
+    const used = [1, 3, 10, 100].map(times => verifyBeam(
+      beamOf(2400, { line: [line(0, 2400, times * 200, 0)], point: [point(1000, times * 500e3, 0)], restraint: heldOver(2400) }), UB, 'S355', rulesOf(),
+    ).utilisation.bending)
+    for (let i = 1; i < used.length; i++) expect(used[i]!).toBeGreaterThan(used[i - 1]!)
+    expect(used.every(Number.isFinite)).toBe(true)
   })
 
   it('finds the worst place inside a uniformly loaded stretch', () => {
@@ -169,7 +247,48 @@ describe('combinations 6.10a and 6.10b', () => {
   })
 })
 
+describe('both combinations', () => {
+  it('are verified: the governing check may be under the one that is not shown, and a note says so', () => {
+    // more moment under 6.10a from permanent load, more shear under 6.10b from variable load beside a support
+    const beam = beamOf(3000, { line: [line(0, 3000, 30, 0)], point: [point(30, 0, 80e3)], restraint: heldOver(3000) }, [], false)
+    const verified = verifyBeam(beam, UB, 'S355', rulesOf({ combination: '6.10ab', limits: NO_LIMITS }))
+    const [a, b] = verified.cases
+    expect(verified.cases[verified.shown]!.combination).toBe('6.10a')
+    expect(b!.utilisation.shear).toBeGreaterThan(a!.utilisation.shear)
+    expect([verified.governing, verified.largest]).toEqual(['shear', b!.utilisation.shear])
+    expect(verified.notes).toEqual([expect.stringContaining('more under 6.10b than under 6.10a')])
+    const same = verifyBeam(beamOf(3000, { line: [line(0, 3000, 5, 30)], restraint: heldOver(3000) }), UB, 'S355', rulesOf({ combination: '6.10ab' }))
+    expect(same.notes).toEqual([])
+  })
+
+  it('count the accompanying part with its height', () => {
+    const Mcr = (variable: ReturnType<typeof line>) => verifyBeam(
+      beamOf(9000, { line: [line(0, 9000, 6, 0), variable] }, [], false), UB, 'S355', rulesOf({ combination: '6.10ab' }),
+    ).cases[0]!.Mcr!
+    expect(Mcr(line(0, 9000, 0, 4, 'top'))).toBeLessThan(0.97 * Mcr(line(0, 9000, 0, 4)))
+  })
+})
+
+describe('frequency', () => {
+  it('counts permanent load and the stated share of the variable load', () => {
+    const of = (variableShare: number) => verifyBeam(
+      beamOf(9000, { line: [line(0, 9000, 8, 10)], restraint: heldOver(9000) }, [], false), UB, 'S355', rulesOf({ limits: { ...NO_LIMITS, frequency: 4, variableShare } }),
+    )
+    const deflection = (w: number) => 5 * w * 9000 ** 4 / (384 * 210_000 * UB.Iy)
+    expect(of(0.3).frequency).toBeCloseTo(18 / Math.sqrt(deflection(11)), 9)
+    expect(of(0.3).utilisation.frequency).toBeCloseTo(4 / (18 / Math.sqrt(deflection(11))), 9)
+    expect(of(0).frequency).toBeCloseTo(18 / Math.sqrt(deflection(8)), 9)
+  })
+})
+
 describe('construction stage', () => {
+  it('counts the worst of its cases, whatever their order', () => {
+    const wet = (load: number) => ({ name: `wet slab of ${load}`, line: [line(0, 9000, load, 1, 'top' as const)], point: [], restraint: FREE })
+    const of = (loads: number[]) => verifyBeam(beamOf(9000, { line: [line(0, 9000, 1, 1)], restraint: heldOver(9000) }, loads.map(wet)), UB, 'S355', rulesOf()).utilisation.construction
+    expect(of([8, 2])).toBe(of([2, 8]))
+    expect(of([8, 2])).toBeGreaterThan(of([2])!)
+  })
+
   it('governs where the bare beam is free, and says so', () => {
     const service = { line: [line(0, 9000, 12, 8)], restraint: heldOver(9000) }
     const wet = { name: 'wet slab', line: [line(0, 9000, 12, 2.3, 'top')], point: [], restraint: FREE }
@@ -235,6 +354,9 @@ describe('bad input', () => {
     ['overlapping stretches', () => verifyBeam(beamOf(6000, { restraint: { held: [{ from: 0, to: 3000 }, { from: 2000, to: 4000 }], points: [] } }), UB, 'S355', rulesOf()), 'service.restraint.held[1].from'],
     ['infinite limit', () => lightestSections(good, [UB], 'S355', rulesOf({ limits: { ...NO_LIMITS, total: Infinity } })), 'limits.total'],
     ['share above 1', () => verifyBeam(good, UB, 'S355', rulesOf({ limits: { ...NO_LIMITS, variableShare: 2 } })), 'limits.variableShare'],
+    ['a load out of all range', () => verifyBeam(beamOf(6000, { line: [line(0, 6000, 1e13, 1)] }), UB, 'S355', rulesOf()), 'service.line[0].permanent'],
+    ['a span of a hair', () => verifyBeam(beamOf(0.5, { line: [line(0, 0.5, 1, 1)] }), UB, 'S355', rulesOf()), 'span'],
+    ['a thousand restraints', () => verifyBeam(beamOf(6000, { restraint: { held: [], points: Array.from({ length: 1000 }, (_, i) => i) } }), UB, 'S355', rulesOf()), 'service.restraint.points'],
     ['grade not offered', () => verifyBeam(good, findSection('UC 356x406x1299')!, 'S355', rulesOf({ choice: nationalChoice('EN') })), 'grade'],
   ]
 

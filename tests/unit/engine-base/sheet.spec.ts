@@ -126,6 +126,18 @@ describe('words of the sheet', () => {
     expect(temperature('6.10ab', 20, 1)).toEqual(['6.10a', expect.closeTo(expected(20, 1), 6)])
   })
 
+  it('shows the rules of a tie where the beam serves as one', () => {
+    const beam = beamOf(9000, { restraint: FREE })
+    const tie = (context: { tieForce?: number }) => calculationSheet(beam, findSection('UB 254x102x22')!, 'S355', rulesOf(), { title: 'tie', ...context })
+      .groups.find(({ title }) => title === 'Tie')?.rows
+    expect(tie({})).toBeUndefined()
+    // A 28.02 cm²: 2802 · 355 = 995 kN; L/40 = 225 mm against 254; L/300 = 30 mm against iz 20.6
+    const rows = tie({ tieForce: 99_000 })!
+    expect(rows.map(({ utilisation }) => utilisation)).toEqual([expect.closeTo(99 / 994.7, 3), expect.closeTo(225 / 254, 9), expect.closeTo(30 / 20.58, 2)])
+    expect(rows.flatMap(row => wrongEqualities(row.substituted))).toEqual([])
+    expect(differenceOf(rows[0]!)).toBeLessThan(1e-3)
+  })
+
   it('says where k_c comes from', () => {
     const beam = beamOf(6000, { line: [line(0, 6000, 8, 6)], restraint: FREE })
     const words = (code: 'EN' | 'UK') => sheetOf(beam, 'UB 457x191x67', rulesOf({ choice: nationalChoice(code), useF: true }))

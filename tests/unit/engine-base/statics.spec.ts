@@ -74,6 +74,7 @@ describe('a simply supported beam', () => {
 
   it('merges stations that are the same place', () => {
     expect(Array.from(stationsOf(L, [3000, 3000 + 1e-9, 0, L, 5000]))).toEqual([0, 3000, 5000, L])
+    expect(Array.from(stationsOf(L, [3000, 3000.01]))).toEqual([0, 3000, 3000.01, L])
   })
 
   it('takes 18/√δ as frequency', () => {

@@ -4,7 +4,7 @@ import { plateModel } from '#shared/engine/plate'
 import { carriedLoads, columnReactions, isUnsized, NO_CAPS, prepareFrame, sizeFrame } from '#shared/engine/search/sizedFrame'
 import { type Sizer, sizingRules } from '#shared/engine/search/sizer'
 import { CATALOGUE } from '#shared/engine/sections'
-import type { Beam } from '#shared/engine/members'
+import type { Beam, SizedSection } from '#shared/engine/members'
 import type { Plate } from '#shared/schemas/plate'
 import { basisOf } from '../search/inputs'
 
@@ -34,9 +34,9 @@ export function framed(plate: Plate, direction: 'x' | 'y', divisions: number, ..
   const grid = { xs: plate.gridX.map(line => line.at), ys: plate.gridY.map(line => line.at) }
   const frame = frameArrangement(model, { grid, regions: [{ direction, divisions }, ...others] }, RULES)
   if (isRejected(frame)) throw new Error(`${frame.rejection}: ${frame.detail}`)
+  const weightless: SizedSection = { section: WEIGHTLESS, utilisation: 0, governing: 'bending' }
   const sizer: Sizer = {
-    rules: sizingRules(model, basisOf()), frequency: () => null,
-    staircase: () => [{ section: WEIGHTLESS, utilisation: 0, governing: 'bending' }],
+    rules: sizingRules(model, basisOf()), frequency: () => null, staircase: () => [weightless], withinDepths: () => () => weightless,
   }
   const prepared = prepareFrame(frame, model, sizer)
   const sized = sizeFrame(prepared, sizer, NO_CAPS)

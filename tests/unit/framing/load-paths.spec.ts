@@ -5,7 +5,7 @@ import { verifyBeam } from '#shared/engine/members'
 import { findSection } from '#shared/engine/sections'
 import type { PlateInput } from '#shared/schemas/plate'
 import { basisOf, plateOf } from '../search/inputs'
-import { type Loads, framed } from './framed'
+import { type Loads, framed, rejectionOf } from './framed'
 
 /** 4 kN/m² permanent, 3 kN/m² variable. */
 const office = {
@@ -193,6 +193,60 @@ describe('a void up to 600 mm beside a beam', () => {
     expect(f.beam('y', 5399).kind).toBe('trimmer')
     const near = framed(plate([9000], [7500], { voids: [{ name: 'Riser', x: 3000, y: 1000, width: 2400, height: 4000 }] }), 'x', 3)
     expect(near.frame.beams.some(b => b.axis === 'y' && b.kind === 'trimmer')).toBe(false)
+  })
+})
+
+describe('two voids side by side', () => {
+  it('are parted by a trimmer where a void lies between an edge and the beam', () => {
+    // voids 0–0.4 and 0.4–0.8 at the corner of a bay of 3 × 3 m: the beam at x = 0 lies within 600 mm of 0.4, but beyond the first void
+    const f = framed(plate([3000], [3000], { voids: [{ name: 'A', x: 0, y: 0, width: 400, height: 400 }, { name: 'B', x: 400, y: 0, width: 400, height: 400 }] }), 'x', 2)
+    // one head for both at y = 0.4, from the edge to the secondary at 1.5; sides at 0.4 and 0.8
+    expect(f.frame.beams.filter(b => b.kind === 'trimmer').map(b => [b.axis, b.at, b.from, b.to]))
+      .toEqual([['x', 400, 0, 1500], ['y', 400, 0, 400], ['y', 800, 0, 400]])
+    // 9 − 0.32 = 8.68 m² · 4 = 34.72 kN
+    expect(f.frame.columns.reduce((sum, c) => sum + f.column(c.x, c.y).permanent, 0)).toBeCloseTo(34.72, 8)
+    // slab 0.8–1.5 between the side and the secondary: 0.35 · 4 = 1.4 kN/m
+    expectRows(f.lines(f.beam('y', 800)), [[0, 0.4, 1.4, 1.05]])
+    expectRows(f.lines(f.beam('y', 400)), [])
+  })
+})
+
+describe('a stair and a lift beside each other in one bay', () => {
+  // stair 0.4–2.6 × 1–6, lift 2.9–4.9 × 2–4.2 in a bay of 9 × 7.5 m, secondary at 4.5 m cut by the lift
+  const voids = [{ name: 'Stair', x: 400, y: 1000, width: 2200, height: 5000 }, { name: 'Lift', x: 2900, y: 2000, width: 2000, height: 2200 }]
+  const f = framed(plate([9000], [7500], { voids }), 'x', 2)
+
+  it('ends the lift\'s heads on the stair\'s side, the stair\'s heads on no beam that leans on it', () => {
+    const trimmers = f.frame.beams.filter(b => b.kind === 'trimmer').map(b => [b.axis, b.at, b.from, b.to])
+    // the stair's left edge is trimmed by the beam at x = 0 (0.4 m); its heads run to x = 9, past the cut secondary at 4.5
+    expect(trimmers).toEqual([
+      ['x', 1000, 0, 9000], ['x', 6000, 0, 9000], ['x', 2000, 2600, 9000], ['x', 4200, 2600, 9000],
+      ['y', 2600, 1000, 6000], ['y', 2900, 2000, 4200], ['y', 4900, 2000, 4200],
+    ])
+    expect(f.frame.beams.filter(b => b.axis === 'y' && b.at === 4500).map(b => [b.from, b.to]).sort((a, b) => a[0]! - b[0]!))
+      .toEqual([[0, 1000], [1000, 2000], [4200, 6000], [6000, 7500]])
+  })
+
+  it('carries the slab between them half by either side', () => {
+    // 0.3 m between 2.6 and 2.9 from y = 2 to 4.2: 0.15 · 4 = 0.6 kN/m; above and below the lift the side of the stair takes (4.5 − 2.6)/2 = 0.95 m
+    expectRows(f.lines(f.beam('y', 2600)), [[0, 1, 3.8, 2.85], [1, 3.2, 0.6, 0.45], [3.2, 5, 3.8, 2.85]])
+    expectRows(f.lines(f.beam('y', 2900)), [[0, 2.2, 0.6, 0.45]])
+    // slab 67.5 − 11 − 4.4 = 52.1 m²
+    expect(f.frame.columns.reduce((sum, c) => sum + f.column(c.x, c.y).permanent, 0)).toBeCloseTo(52.1 * 4, 8)
+  })
+
+  it('is framed in both directions with any divisions', () => {
+    for (const direction of ['x', 'y'] as const) {
+      for (const divisions of [1, 2, 3, 4]) expect(rejectionOf(plate([9000], [7500], { voids, slab: { system: 'deck', depth: 130, maxSpan: 9000 } }), direction, divisions)).toBe('framed')
+    }
+  })
+})
+
+describe('two voids corner to corner', () => {
+  it('are rejected where the trimmers of one would cross those of the other', () => {
+    // the head of A at y = 0.4 would cross the sides of B, which reach down to the beam at y = 0
+    const voids = [{ name: 'A', x: 0, y: 0, width: 400, height: 400 }, { name: 'B', x: 400, y: 400, width: 400, height: 400 }]
+    expect(rejectionOf(plate([3000], [2000], { voids }), 'x', 1)).toBe('void-cuts-beam')
   })
 })
 

@@ -265,6 +265,8 @@ function refine(mesh: BucklingMesh, raised: boolean, start: number): number {
   return lambda
 }
 
+/** Steps from the trial shape, so that the moving shift begins next to the smallest eigenvalue. */
+const STEPS_TO_START = 2
 /** How far below a found eigenvalue there must be none. */
 const PROOF = 1e-7
 
@@ -284,7 +286,7 @@ export function criticalFactor(
   room.theta.set(mesh.trial)
   let lambda = rayleighOf(mesh, raised, room.theta)
   if (!Number.isFinite(lambda) || lambda === 0) return Number.POSITIVE_INFINITY
-  if (mesh.restraints > 0) lambda = iterate(mesh, raised, 0, lambda, 5)
+  if (mesh.restraints > 0) lambda = iterate(mesh, raised, 0, lambda, STEPS_TO_START)
   const found = refine(mesh, raised, lambda)
   if (factorAt(mesh, found * (1 - PROOF), raised) === 0) return found
   return smallestByBisection(mesh, raised, found)

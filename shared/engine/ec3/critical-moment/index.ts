@@ -26,7 +26,7 @@ export interface CriticalMomentInput {
   section: { Iz: number, It: number, Iw: number }
   /** mm, positive above the shear centre (towards the compressed flange of a sagging beam). */
   zg: number
-  /** Elements on each piece between restraints. */
+  /** Elements on each piece between restraints; without it the mesh chooses (8, or up to 6 on each of several pieces). */
   elements?: number
   shearModulus?: number
 }

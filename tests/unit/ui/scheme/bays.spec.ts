@@ -17,7 +17,8 @@ describe('bays in words', () => {
   it('names the commonest bay, of equals the longer', () => {
     expect(commonest([7500, 7500, 6000])).toBe(7500)
     expect(commonest([6000, 9000])).toBe(9000)
-    expect(typicalBay([9000, 9000], [7500, 6000, 7500])).toBe('9.0 × 7.5 m bays')
+    expect(typicalBay([9000, 9000], [7500, 6000, 7500])).toBe('mostly 9.0 × 7.5 m bays')
+    expect(typicalBay([9000, 9000], [7500, 7500])).toBe('9.0 × 7.5 m bays')
   })
 
   it('sets out the lines', () => {

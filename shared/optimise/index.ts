@@ -1,0 +1,1 @@
+export { MOST_ROWS, proposeSections, rowsOf } from './integerProgramme'
