@@ -8,7 +8,9 @@ import type PgBoss from 'pg-boss'
 import { EngineError } from '#shared/engine/errors'
 import { databaseUrl, openClient } from '~~/server/database/client'
 import { failStudy, findProgress } from '~~/server/database/queries/studies'
-import { CANCEL_CHANNEL, LOST_QUEUE, STUDY_QUEUE, WORK_CHANNEL, openBoss, type StudyJob } from '~~/server/database/queue'
+import { ANSWER_QUEUE, CANCEL_CHANNEL, LOST_QUEUE, STUDY_QUEUE, WORK_CHANNEL, openBoss, type Job } from '~~/server/database/queue'
+import { openBell } from './bell'
+import { answerQuestion, giveUpAnswer } from './jobs/answer-question'
 import { examinePart } from './jobs/examine-part'
 import { IncompleteStudyError, finishStudy } from './jobs/finish-study'
 import { giveUpStudy } from './jobs/give-up-study'
@@ -28,31 +30,18 @@ const client = openClient(url, {
   onConnectionLost: error => log.warn({ error: error.message }, 'a database connection was lost'),
 })
 const pool = openThreads(threads)
-const worker: Worker = { db: client.db, log, search: pool.search, isEnded: pool.isStopped }
+const worker: Worker = { db: client.db, log, search: pool.search, answer: pool.answer, isEnded: pool.isStopped }
 const boss = openBoss(client.pool)
 boss.on('error', error => log.warn({ error: String(error) }, 'the queue could not be looked after'))
 
 let isStopping = false
-let wake = () => {}
-let wasCalled = false
+/** Studies and answers are waited for apart. */
+const studyBell = openBell()
+const answerBell = openBell()
 
 function call(): void {
-  wasCalled = true
-  wake()
-}
-
-/** Resolves at the next word of work, or after a second. */
-async function nextCall(): Promise<void> {
-  if (!wasCalled && !isStopping) {
-    await new Promise<void>((resolve) => {
-      const timer = setTimeout(resolve, LOOK_AFTER_MS)
-      wake = () => {
-        clearTimeout(timer)
-        resolve()
-      }
-    })
-  }
-  wasCalled = false
+  studyBell.ring()
+  answerBell.ring()
 }
 
 /** A word of cancelling; without a payload words may have been missed, so what runs is looked up. */
@@ -64,22 +53,28 @@ async function hearCancel(studyId: string | undefined): Promise<void> {
   }
 }
 
-async function work({ data }: PgBoss.Job<StudyJob>): Promise<void> {
+async function work({ data }: PgBoss.Job<Job>): Promise<void> {
   if (data.kind === 'plan') await planStudy(worker, data.studyId)
   else if (data.kind === 'part') await examinePart(worker, data.studyId, data.number)
+  else if (data.kind === 'answer') await answerQuestion(worker, data)
   else await finishStudy(worker, data.studyId)
 }
 
+async function giveUp({ data }: PgBoss.Job<Job>): Promise<void> {
+  if (data.kind === 'answer') await giveUpAnswer(worker, data)
+  else await giveUpStudy(worker, data)
+}
+
 /** An error that comes back however often the job is tried ends its study; others are tried again. */
-async function workOff(queue: string, job: PgBoss.Job<StudyJob>): Promise<void> {
+async function workOff(queue: string, job: PgBoss.Job<Job>): Promise<void> {
   try {
-    if (queue === LOST_QUEUE) await giveUpStudy(worker, job.data)
+    if (queue === LOST_QUEUE) await giveUp(job)
     else await work(job)
     await boss.complete(queue, job.id)
   } catch (error) {
     const { message } = error instanceof Error ? error : new Error(String(error))
     log.error({ job: job.data, error: message }, 'a job failed')
-    const isFinal = error instanceof IncompleteStudyError || error instanceof EngineError
+    const isFinal = job.data.kind !== 'answer' && (error instanceof IncompleteStudyError || error instanceof EngineError)
     try {
       if (isFinal) await failStudy(client.db, job.data.studyId, `The study could not be brought to its end. ${message}`)
       await (isFinal ? boss.complete(queue, job.id) : boss.fail(queue, job.id, { message }))
@@ -90,9 +85,9 @@ async function workOff(queue: string, job: PgBoss.Job<StudyJob>): Promise<void> 
   }
 }
 
-async function fetchJob(): Promise<{ queue: string, job: PgBoss.Job<StudyJob> } | undefined> {
+async function fetchJob(): Promise<{ queue: string, job: PgBoss.Job<Job> } | undefined> {
   for (const queue of [STUDY_QUEUE, LOST_QUEUE]) {
-    const [job] = await boss.fetch<StudyJob>(queue)
+    const [job] = await boss.fetch<Job>(queue)
     if (job) return { queue, job }
   }
   return undefined
@@ -108,7 +103,7 @@ async function takeJobs(): Promise<void> {
     }
     const fetched = await fetchJob()
     if (!fetched) {
-      await nextCall()
+      await studyBell.next(LOOK_AFTER_MS)
       continue
     }
     const job = workOff(fetched.queue, fetched.job).finally(() => running.delete(job))
@@ -117,10 +112,20 @@ async function takeJobs(): Promise<void> {
   await Promise.all(running)
 }
 
-/** Begins nothing new, ends what is begun (a part takes a fraction of a second), and gives everything back. */
+/** One question after the other. */
+async function takeQuestions(): Promise<void> {
+  while (!isStopping) {
+    const [job] = await boss.fetch<Job>(ANSWER_QUEUE)
+    if (job) await workOff(ANSWER_QUEUE, job)
+    else await answerBell.next(LOOK_AFTER_MS)
+  }
+}
+
+/** Begins nothing new, ends what is begun (a part takes a fraction of a second), and gives everything back; an answer is left to another worker. */
 function stop(): void {
   isStopping = true
-  wake()
+  pool.stopAnswers()
+  call()
 }
 
 process.once('SIGTERM', stop)
@@ -134,7 +139,7 @@ const listening = listenFor(url, {
 })
 log.info({ threads }, 'worker takes jobs')
 process.send?.('ready')
-await takeJobs()
+await Promise.all([takeJobs(), takeQuestions()])
 await listening.stop()
 await boss.stop({ graceful: false })
 await pool.close()

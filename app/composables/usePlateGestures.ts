@@ -226,8 +226,9 @@ export function usePlateGestures(state: DrawingState, hooks: GestureHooks) {
     if (store.tool === 'column') {
       if (hit?.kind !== 'selection' || hit.selection.kind !== 'column') return
       const { x, y } = hit.selection
-      store.run(plate => toggleColumn(plate, plate.gridX[x]?.label ?? '', plate.gridY[y]?.label ?? ''))
-      return store.select(hit.selection)
+      // Selecting clears the last refusal, so it comes first.
+      store.select(hit.selection)
+      return void store.run(plate => toggleColumn(plate, plate.gridX[x]?.label ?? '', plate.gridY[y]?.label ?? ''))
     }
     if (hit?.kind === 'bay-length' || hit?.kind === 'overall') return hooks.edit(hit)
     if (hit?.kind !== 'handle') store.select(hit?.selection ?? null)

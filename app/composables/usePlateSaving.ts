@@ -23,7 +23,10 @@ export function usePlateSaving() {
   let retryAfter = FIRST_RETRY_MS
   let sending: Promise<void> | null = null
 
-  const key = () => `baywright-plate-${store.record?.id ?? ''}`
+  const session = useSessionStore()
+  /** Of the account too: who signs in next in this browser does not find another's changes. */
+  const keyOf = (id: string) => `baywright-plate-${session.account?.id ?? ''}-${id}`
+  const key = () => keyOf(store.record?.id ?? '')
 
   function keepDraft() {
     if (!store.record || !store.document) return
@@ -62,7 +65,7 @@ export function usePlateSaving() {
         method: 'PUT', body: { version: record.version, document },
       })
       const { document: _, ...version } = answer
-      if (store.record?.id !== record.id) return localStorage.removeItem(`baywright-plate-${record.id}`)
+      if (store.record?.id !== record.id) return localStorage.removeItem(keyOf(record.id))
       store.noteSaved(version, document)
       retryAfter = FIRST_RETRY_MS
       sentence.value = null

@@ -43,7 +43,7 @@ const office: PlateInput = {
     { name: 'Core east', x: 38_000, y: 15_500, width: 5_000, height: 5_000 },
   ],
   keepClear: [{ name: 'Foyer', x: 22_500, y: 15_000, width: 9_000, height: 6_000 }],
-  slab: { system: 'deck', name: 'Deck slab 130', depth: 130, weight: 2.75, maxSpan: 3_300 },
+  slab: { system: 'deck', name: 'Composite deck 130/60', depth: 130, weight: 2.75, maxSpan: 3_300 },
   floorLoad: { permanent: 3.6, variable: 3.8, category: 'B' },
   lineLoads: [{ name: 'Curtain wall', on: 'outline', permanent: 4, variable: 0 }],
   storeys: 4, storeyHeight: 4_000,

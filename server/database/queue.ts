@@ -1,6 +1,6 @@
 /**
  * The durable queue (pg-boss on our own PostgreSQL): what the jobs are called, how they are sent.
- * A job carries the study's id and the number of its part, nothing else.
+ * A job carries the study's id and the number of its part or the name of a question, nothing else.
  */
 import { CompiledQuery, sql } from 'kysely'
 import type pg from 'pg'
@@ -12,7 +12,12 @@ export type StudyJob
     | { kind: 'part', studyId: string, number: number }
     | { kind: 'finish', studyId: string }
 
+export interface AnswerJob { kind: 'answer', studyId: string, question: string }
+export type Job = StudyJob | AnswerJob
+
 export const STUDY_QUEUE = 'study-work'
+/** Questions about ranked studies: they take seconds, so that parts of studies do not stand behind them. */
+export const ANSWER_QUEUE = 'study-answers'
 /** Where a job goes that has used up its attempts. */
 export const LOST_QUEUE = 'study-work-lost'
 /** Notification channels. */
@@ -22,6 +27,8 @@ export const PROGRESS_CHANNEL = 'baywright_progress'
 
 /** s after which a job whose worker was lost is given to another; a part is 50–200 ms of work. */
 export const JOB_EXPIRES_S = 14
+/** The same for an answer, which is one piece of work. */
+export const ANSWER_EXPIRES_S = 300
 /** Attempts of one job before its study is given up. */
 export const JOB_ATTEMPTS = 3
 
@@ -52,6 +59,9 @@ export async function prepareQueues(url: string): Promise<void> {
     await boss.createQueue(LOST_QUEUE, { name: LOST_QUEUE, ...limits })
     await boss.createQueue(STUDY_QUEUE, { name: STUDY_QUEUE, ...limits, deadLetter: LOST_QUEUE })
     await boss.updateQueue(STUDY_QUEUE, { name: STUDY_QUEUE, ...limits, deadLetter: LOST_QUEUE })
+    const answers = { name: ANSWER_QUEUE, ...limits, expireInSeconds: ANSWER_EXPIRES_S, deadLetter: LOST_QUEUE }
+    await boss.createQueue(ANSWER_QUEUE, answers)
+    await boss.updateQueue(ANSWER_QUEUE, answers)
   } finally {
     await boss.stop({ graceful: false })
   }
@@ -91,6 +101,16 @@ export async function sendJobs(db: Db, jobs: readonly StudyJob[]): Promise<void>
       deadLetter: LOST_QUEUE,
     })), { db: executor })
   }
+  await notify(db, WORK_CHANNEL, '')
+}
+
+/** Sends a question in the transaction `db`; workers are woken when it is committed. */
+export async function sendAnswerJob(db: Db, job: AnswerJob): Promise<void> {
+  const executor = executorOf(db)
+  const sender = new PgBoss({ db: executor, schema: SCHEMA, supervise: false, schedule: false, migrate: false })
+  await sender.insert([{
+    name: ANSWER_QUEUE, data: job, retryLimit: JOB_ATTEMPTS - 1, expireInSeconds: ANSWER_EXPIRES_S, deadLetter: LOST_QUEUE,
+  }], { db: executor })
   await notify(db, WORK_CHANNEL, '')
 }
 

@@ -1,5 +1,6 @@
 /** The tables as Kysely sees them. Migrations make them; this file only types them. */
 import type { ColumnType, Generated } from 'kysely'
+import type { AnswerState } from '#shared/schemas/answers'
 import type { Basis } from '#shared/schemas/basis'
 import type { Plate } from '#shared/schemas/plate'
 import type { ProjectRole, SchemeRow, StudyProgress, StudyState } from '#shared/schemas/api'
@@ -134,6 +135,20 @@ export interface SchemesTable {
   summary: Document<SchemeRow>
 }
 
+/** Questions about a ranked study that a worker answers. */
+export interface AnswersTable {
+  study_id: string
+  /** As `questionName` writes it. */
+  question: string
+  state: Generated<AnswerState>
+  result: DocumentMaybe<unknown>
+  failure: ColumnType<string | null, string | null | undefined, string | null>
+  engine_version: ColumnType<string | null, string | null | undefined, string | null>
+  asked_by: string
+  asked_at: WhenDefault
+  answered_at: WhenMaybe
+}
+
 export interface ActivityTable {
   id: Generated<string>
   practice_id: string
@@ -158,6 +173,7 @@ export interface Database {
   studies: StudiesTable
   study_parts: StudyPartsTable
   schemes: SchemesTable
+  answers: AnswersTable
   activity: ActivityTable
   rate_limits: RateLimitsTable
 }

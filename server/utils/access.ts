@@ -5,9 +5,9 @@ import type { Account } from '../database/queries/accounts'
 import { findPlate } from '../database/queries/plates'
 import { findProjectAccess } from '../database/queries/projects'
 import { findScheme } from '../database/queries/schemes'
-import { findStudyProject } from '../database/queries/studies'
+import { findProgress, findStudyProject } from '../database/queries/studies'
 import { useDb } from './db'
-import { notFound, refusal } from './refusal'
+import { missing, notFound, refusal } from './refusal'
 
 const UUID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i
 
@@ -67,12 +67,23 @@ export async function requireStudy(event: H3Event, ...actions: ProjectAction[]) 
   return { ...await accessTo(event, projectId, 'study', actions), studyId }
 }
 
+/** For questions that rest on a study's ranking: whoever may read may ask. */
+export async function requireRankedStudy(event: H3Event) {
+  const access = await requireStudy(event, 'project.read')
+  const progress = await findProgress(useDb(), access.studyId)
+  if (progress?.state === 'finished') return access
+  const isToCome = progress?.state === 'queued' || progress?.state === 'running'
+  throw refusal('not-ready', isToCome
+    ? 'The answer rests on the ranking, which is not there yet. Ask when the study has examined every arrangement.'
+    : 'The study ended without a ranking, and the answer rests on that. Run its range again.')
+}
+
 /** For routes under /api/studies/:id/schemes/:key. */
 export async function requireScheme(event: H3Event) {
   const { studyId } = await requireStudy(event, 'project.read')
   const key = getRouterParam(event, 'key', { decode: true }) ?? ''
   // PostgreSQL takes no NUL in a text.
   const row = key.includes('\0') ? undefined : await findScheme(useDb(), studyId, key)
-  if (!row) throw notFound('scheme')
+  if (!row) throw missing('scheme', 'study')
   return { studyId, row }
 }

@@ -24,5 +24,11 @@ export function refusal(code: ApiErrorCode, message: string, more: { path?: stri
 
 /** 404 for what is missing and for what is not the asker's: the answer tells no difference. */
 export function notFound(what: string): H3Error {
-  return refusal('not-found', `This ${what} does not exist, or you are not one of its people. Ask the engineer of the project to add you.`)
+  const people = what === 'project' ? 'its people' : 'the people of its project'
+  return refusal('not-found', `This ${what} does not exist, or you are not one of ${people}. Ask the engineer of the project to add you.`)
+}
+
+/** 404 for a part of what the asker may read. */
+export function missing(part: string, whole: string): H3Error {
+  return refusal('not-found', `This ${whole} has no such ${part}.`)
 }

@@ -1,5 +1,6 @@
 /** Basis of design: what the sizing of every member rests on. */
 import { z } from 'zod'
+import './words'
 
 export const FAMILIES = ['UB', 'UC', 'IPE', 'IPE A', 'HEAA', 'HEA', 'HEB', 'HEM'] as const
 export const FamilySchema = z.enum(FAMILIES)

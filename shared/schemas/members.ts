@@ -5,6 +5,8 @@ import { GradeSchema, NationalChoiceSchema } from './basis'
 /** Beyond these no floor beam lies, and sums of squares stay finite. */
 const LONGEST = 1_000_000
 const LARGEST_LOAD = 1_000_000
+/** Share of the span: on a shorter stretch a line load would be lost. */
+const SHORTEST_STRETCH = 1e-9
 const MOST_LOADS = 10_000
 const MOST_RESTRAINTS = 100
 
@@ -59,6 +61,11 @@ export const MemberSchema = z.strictObject({
   line.forEach(({ from, to }, i) => {
     outside(from, ['line', i, 'from'])
     outside(to, ['line', i, 'to'])
+    if (to > from && to - from <= SHORTEST_STRETCH * span) {
+      context.issues.push({
+        code: 'custom', input: to, path: ['line', i, 'to'], params: { code: 'empty-stretch' }, message: 'A line load must end after its start.',
+      })
+    }
   })
   point.forEach(({ at }, i) => outside(at, ['point', i, 'at']))
   if (restraint.kind === 'points') restraint.at.forEach((at, i) => outside(at, ['restraint', 'at', i]))

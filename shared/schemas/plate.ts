@@ -3,6 +3,7 @@
  * stores, imports and exports and what `headless study` reads.
  */
 import { z } from 'zod'
+import './words'
 
 /** Farthest coordinate of a plate, mm: a kilometre either way. */
 const LIMIT_MM = 1_000_000
@@ -82,7 +83,7 @@ export const LineLoadPlaceSchema = z.union([
   z.literal('outline'),
   z.strictObject({ from: point, to: point }),
   z.strictObject({ void: name }),
-])
+], 'A line load stands on "outline", on { from, to } or on { void }.')
 
 export const LineLoadSchema = z.strictObject({
   name,

@@ -56,6 +56,10 @@ export interface SchemeMember {
   section: string
   governing: string
   utilisation: number
+  /** Columns: lifts from the base up, levels counted from 0 at the base. */
+  lifts?: { fromLevel: number, toLevel: number, section: string, utilisation: number }[]
+  /** Columns: load at the base over all storeys and the roof, own weight included, kN; permanent and variable unfactored. */
+  base?: { permanent: number, variable: number, ultimate: number }
 }
 
 export interface SchemeResult {
@@ -89,6 +93,8 @@ export interface SchemeResult {
 export interface StudyResult {
   counts: StudyCounts
   schemes: SchemeResult[]
+  /** The first arrangements left out, each with its reason; `place` in grid words where one member is to blame. */
+  leftOut: { number: number, rejection: Rejection, detail: string, place: string | null }[]
   /** Ranks of the schemes on the trade-off line. */
   tradeOff: number[]
 }

@@ -48,6 +48,12 @@ const ROUTES: Row[] = [
     file: 'studies/[id]/schemes/[key]/members/[mark].get', actions: ['project.read'],
     path: ids => `/api/studies/${ids.study}/schemes/${encodeURIComponent(ids.key)}/members/${encodeURIComponent(ids.mark)}`,
   },
+  { file: 'studies/[id]/why-not.post', path: ids => `/api/studies/${ids.study}/why-not`, body: () => ({ number: 1 }), actions: ['project.read'] },
+  {
+    file: 'studies/[id]/answers/index.post', path: ids => `/api/studies/${ids.study}/answers`,
+    body: () => ({ kind: 'robustness' }), actions: ['project.read'],
+  },
+  { file: 'studies/[id]/answers/index.get', path: ids => `/api/studies/${ids.study}/answers`, actions: ['project.read'] },
   { file: 'verification.get', path: () => '/api/verification', actions: null },
 ]
 

@@ -144,7 +144,7 @@ describe('pages of the ranked table', () => {
 
   it.each([
     ['sort=colour', 'sort'], ['limit=201', 'limit'], ['limit=0', 'limit'], ['limit=many', 'limit'], ['divisions=2;drop', 'divisions'],
-    ['after=nonsense', 'after'], ['depthAtMost=NaN', 'depthAtMost'], ['colour=red', 'colour'], ['tradeOff=yes', 'tradeOff'],
+    ['after=nonsense', 'after'], ['after=WzEsOTAwNzE5OTI1NDc0MDk5MV0', 'after'], ['depthAtMost=NaN', 'depthAtMost'], ['colour=red', 'colour'], ['tradeOff=yes', 'tradeOff'],
   ])('refuse %s with 400', async (query, path) => {
     const answer = await engineer.get(`/api/studies/${studyId}/schemes?${query}`)
     expect(answer.status).toBe(400)

@@ -159,7 +159,7 @@ export function sizeLabel(beam: PlanBeam, segment: Segment, text: string, weight
   const length = Math.hypot(segment.x2 - segment.x1, segment.y2 - segment.y1)
   const turned = !runsAlongX(beam)
   const width = sizeWidth(text, fontSize)
-  if (width > length - (turned ? 4 : 12)) return null
+  if (width > length - 4) return null
   const x = (segment.x1 + segment.x2) / 2
   const y = (segment.y1 + segment.y2) / 2
   const off = weight / 2 + 3

@@ -40,7 +40,7 @@ const CHECKS: Record<string, { full: string, short: string }> = {
   deflectionVariable: { full: 'variable deflection', short: 'δ variable' },
   deflectionTotal: { full: 'total deflection', short: 'δ total' },
   frequency: { full: 'frequency', short: 'frequency' },
-  construction: { full: 'construction stage', short: 'construction' },
+  construction: { full: 'construction stage', short: 'constr.' },
   tie: { full: 'tie force and least size', short: 'tie' },
   stability: { full: 'column stability', short: 'stability' },
   buildability: { full: 'buildability rule', short: 'buildability' },

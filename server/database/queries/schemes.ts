@@ -6,6 +6,8 @@ import { PROGRESS_CHANNEL, notify } from '../queue'
 
 /** Rows in one statement. */
 const BATCH = 500
+/** Largest value of PostgreSQL's integer. */
+const LARGEST_INTEGER = 2_147_483_647
 /** Points that a chart takes. */
 const MOST_POINTS = 20_000
 
@@ -62,7 +64,8 @@ export function decodePlace(text: string): Place | undefined {
     const read: unknown = JSON.parse(Buffer.from(text, 'base64url').toString())
     if (!Array.isArray(read) || read.length !== 2) return undefined
     const [value, rank] = read as unknown[]
-    if (typeof value !== 'number' || typeof rank !== 'number' || !Number.isSafeInteger(rank)) return undefined
+    if (typeof value !== 'number' || !Number.isFinite(value) || typeof rank !== 'number') return undefined
+    if (!Number.isInteger(rank) || rank < 0 || rank > LARGEST_INTEGER) return undefined
     return { value, rank }
   } catch {
     return undefined
@@ -116,6 +119,12 @@ export async function listPoints(db: Db, studyId: string): Promise<SchemePoints>
     slab: rows.map(row => row.slab),
     onTradeOffLine: rows.map(row => row.on_trade_off_line),
   }
+}
+
+/** Every kept row of a study, ranked: what the engine answers questions from. */
+export async function listKeptSchemes(db: Db, studyId: string): Promise<SchemeRow[]> {
+  const rows = await db.selectFrom('schemes').select('summary').where('study_id', '=', studyId).orderBy('rank').execute()
+  return rows.map(row => row.summary)
 }
 
 /** A row of the ranked table by its key. */

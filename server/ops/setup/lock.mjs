@@ -25,14 +25,20 @@ export function holder(dataDir) {
 
 /**
  * Takes the data folder for this process; given back when the process ends.
- * @throws {SetupError} when another starter holds it
+ * @throws {SetupError} when another starter holds it, or it cannot be written
  */
 export function takeDataFolder(dataDir, address) {
   const other = holder(dataDir)
   if (other) {
     throw new SetupError(`it already runs from this folder (process ${other.pid}${other.address ? `, ${other.address}` : ''}); use that one, or stop it with "kill ${other.pid}" first.`)
   }
-  const path = join(folder(dataDir), 'starter.json')
-  writeFileSync(path, JSON.stringify({ pid: process.pid, address }))
+  const path = join(dataDir, 'starter.json')
+  try {
+    folder(dataDir)
+    writeFileSync(path, JSON.stringify({ pid: process.pid, address }))
+  } catch (error) {
+    if (error.code === 'ENOSPC') throw error
+    throw new SetupError(`the data folder ${dataDir} cannot be written (${error.code}); mend its rights, or name another folder in BAYWRIGHT_DATA_DIR.`)
+  }
   process.once('exit', () => rmSync(path, { force: true }))
 }

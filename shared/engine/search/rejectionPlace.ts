@@ -1,6 +1,7 @@
 /** Where the member stands that left an arrangement without a scheme, in grid words. */
 import type { Rejection } from '#shared/schemas/study'
 import { resistancesOf, verifyBeam } from '../members'
+import { checkName } from '../sheet'
 import type { NumberedArrangement } from './arrangements'
 import { beamPlace, columnPlace, namedGrid } from './naming'
 import type { PreparedStudy } from './prepare'
@@ -32,5 +33,5 @@ function failingCheck(study: PreparedStudy, { demand }: Unsized, role: 'primary'
   if (offered.length === 0) return ''
   const strongest = offered.reduce((a, b) => b.WplY > a.WplY ? b : a)
   const { governing, largest } = verifyBeam(demand, strongest, grade, rules.beam)
-  return largest > rules.beam.utilisationLimit ? ` (${strongest.designation}: ${governing} ${largest.toFixed(2)})` : ''
+  return largest > rules.beam.utilisationLimit ? ` (${strongest.designation}: ${checkName(governing).toLowerCase()} ${largest.toFixed(2)})` : ''
 }

@@ -41,10 +41,15 @@ export function sizeScheme(
 ): Scheme | NoScheme {
   const sized = sizeCoupled(prepared, study.sizer, capsUnder(study.caps, depthCap))
   if ('coupled' in sized) return { rejection: 'buildability', detail: sized.coupled }
-  if (isUnsized(sized)) return unsized(study, prepared, depthCap, `No section passes for a ${prepared.frame.beams[sized.beam]!.kind} beam.`)
+  if (isUnsized(sized)) return unsized(study, prepared, depthCap, noSectionWords(prepared.frame.beams[sized.beam]!.kind))
   const columns = sizeColumns(study, prepared, sized)
   if (!columns) return unsized(study, prepared, depthCap, 'No section passes for a column.')
   return completeScheme(study, arrangement, prepared, depthCap, sized, columns)
+}
+
+function noSectionWords(kind: string): string {
+  const piece = kind === 'trimmer' ? kind : `${kind} beam`
+  return `No section passes for ${kind === 'edge' ? 'an' : 'a'} ${piece}.`
 }
 
 /** The scheme of sized beams and columns, with its mass; it must be in equilibrium. */

@@ -200,6 +200,9 @@ export function columnReactions(prepared: PreparedFrame, reactions: readonly [nu
   })
 }
 
+/** Below this a load is rounding, N: what is missing of it counts against this. */
+const SMALLEST_LOAD = 1
+
 /** Largest relative difference of the column reactions and all applied load, own weights included, over the kinds. */
 export function equilibriumResidual(prepared: PreparedFrame, sized: SizedFrame): number {
   const { model } = prepared
@@ -211,6 +214,6 @@ export function equilibriumResidual(prepared: PreparedFrame, sized: SizedFrame):
   for (const column of columnReactions(prepared, sized.reactions)) addScaled(carried, column, 1)
   return applied.reduce((worst, load, k) => {
     const difference = Math.abs(carried[k]! - load)
-    return Math.max(worst, load > 0 ? difference / load : difference)
+    return Math.max(worst, difference / Math.max(load, SMALLEST_LOAD))
   }, 0)
 }

@@ -31,6 +31,8 @@ export interface ExamineOptions {
   shouldStop?: () => boolean
   /** Called after each arrangement with the number examined in this part and the part so far. */
   onProgress?: (examined: number, part: StudyPart) => void
+  /** Called for each arrangement that gives no scheme. */
+  onLeftOut?: (number: number, reason: { rejection: Rejection, detail: string }) => void
 }
 
 /** Examines arrangements `from` (counted from 0) up to, not including, `to`. */
@@ -44,6 +46,7 @@ export function examineRange(study: PreparedStudy, from: number, to: number, opt
     part.examined++
     if (isNoSchemeList(result)) {
       part.counts.rejected[result.rejection] = (part.counts.rejected[result.rejection] ?? 0) + 1
+      options.onLeftOut?.(index + 1, result)
     } else {
       part.counts.feasible++
       for (const scheme of result) part.rows.push(schemeRow(study, scheme))

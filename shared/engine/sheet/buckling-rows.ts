@@ -1,6 +1,6 @@
 import { c1QuarterPoints, criticalMomentClosed, criticalMomentUniform, ltbModification, ltbReduction } from '../ec3'
 import type { SegmentVerification } from '../members'
-import { momentIn } from '../statics'
+import { largestMoment, momentIn } from '../statics'
 import type { Basics, CaseBasics } from './basics'
 import { factor, kNm, metres, num, quantity, row } from './format'
 import { reductionRows, slendernessRow, uniformMomentRow } from './ltb-rows'
@@ -19,7 +19,7 @@ const C2_UNIFORM = 0.454
 const C2_BY_LOADS = [0.57, 0.5, 0.48, 0.47, 0.465]
 
 /** C2 for the loads with a height inside the segment, by what prevails among them; 0 where there is none. */
-function loadFactorC2({ x, combination: { qTop, PTop } }: CaseBasics, { from, to }: SegmentVerification): number {
+function loadFactorC2({ x, combination: { qTop, PTop } }: CaseBasics, { from, to }: Piece): number {
   let line = 0
   let point = 0
   let loads = 0
@@ -34,28 +34,68 @@ function loadFactorC2({ x, combination: { qTop, PTop } }: CaseBasics, { from, to
   return line >= point ? C2_UNIFORM : C2_BY_LOADS[loads - 1] ?? C2_UNIFORM
 }
 
-/** The closed form beside the eigenvalue, with the difference stated. */
-function closedRow(basics: Basics, of: CaseBasics, segment: SegmentVerification): SheetRow {
-  const L = segment.to - segment.from
-  const quarter = (k: number) => momentAt(of, segment.from + L * k / 4)
-  const C1 = c1QuarterPoints(segment.MEd, quarter(1), quarter(2), quarter(3))
-  const C2 = loadFactorC2(of, segment)
-  const hasEndMoments = Math.max(Math.abs(quarter(0)), Math.abs(quarter(4))) > 1e-6 * segment.MEd
+/** A length between forks and its largest moment, Nmm. */
+interface Piece { from: number, to: number, MEd: number }
+
+/** Mcr of a piece by C1 of its quarter points, Nmm; zg counts where there are no end moments. */
+function closedForm(basics: Basics, of: CaseBasics, piece: Piece) {
+  const L = piece.to - piece.from
+  const [start, M2, M3, M4, end] = [0, 1, 2, 3, 4].map(k => momentAt(of, piece.from + L * k / 4)) as [number, number, number, number, number]
+  const C1 = c1QuarterPoints(piece.MEd, M2, M3, M4)
+  const C2 = loadFactorC2(of, piece)
+  const hasEndMoments = Math.max(Math.abs(start), Math.abs(end)) > 1e-6 * piece.MEd
   const zg = C2 === 0 || hasEndMoments ? 0 : basics.section.h / 2
-  const closed = criticalMomentClosed(basics.section, L, C1, C2, zg)
-  const difference = 100 * (closed / segment.Mcr! - 1)
-  const leftOut = C2 > 0 && hasEndMoments ? '; z_{g} left out: no C_{2} for these moments' : ''
+  const words = `moments ${[piece.MEd, M2, M3, M4].map(M => num(M / 1e6, 1)).join(', ')} kNm${C2 > 0 && hasEndMoments ? '; z_{g} left out: no C_{2} for these' : ''}`
+  return { C1, C2, zg, words, Mcr: criticalMomentClosed(basics.section, L, C1, C2, zg) }
+}
+
+const QUARTER_POINTS = 'C_{1} = √(35 M^{2} / (M^{2} + 9 M_{2}^{2} + 16 M_{3}^{2} + 9 M_{4}^{2}))'
+
+/** The closed form beside the eigenvalue of one segment, with the difference stated. */
+function closedRow(basics: Basics, of: CaseBasics, segment: SegmentVerification): SheetRow {
+  const { C1, C2, zg, words, Mcr } = closedForm(basics, of, segment)
+  const difference = 100 * (Mcr / segment.Mcr! - 1)
   return row({
     check: 'Closed form, for the eye',
     expression: zg === 0
-      ? 'C_{1} by quarter points, M_{cr} = C_{1} M_{cr,0}'
-      : 'C_{1} by quarter points, M_{cr} = C_{1} (π^{2} E I_{z} / L^{2}) (√(I_{w} / I_{z} + L^{2} G I_{t} / (π^{2} E I_{z}) + (C_{2} z_{g})^{2}) − C_{2} z_{g})',
+      ? `M_{cr} = C_{1} M_{cr,0}, ${QUARTER_POINTS}`
+      : `M_{cr} = C_{1} (π^{2} E I_{z} / L^{2}) (√(I_{w} / I_{z} + L^{2} G I_{t} / (π^{2} E I_{z}) + (C_{2} z_{g})^{2}) − C_{2} z_{g}), ${QUARTER_POINTS}`,
     substituted: zg === 0
-      ? `${num(C1, 3)} × ${num(criticalMomentUniform(basics.section, L) / 1e6, 2)}${leftOut}`
-      : `C_{1} ${num(C1, 3)}, C_{2} ${num(C2, 3)}, z_{g} ${num(zg, 1)}`,
+      ? `${num(C1, 3)} × ${num(criticalMomentUniform(basics.section, segment.to - segment.from) / 1e6, 2)}; ${words}`
+      : `C_{1} ${num(C1, 3)}, C_{2} ${num(C2, 3)}, z_{g} ${num(zg, 1)}; ${words}`,
     effect: `${difference >= 0 ? '+' : ''}${num(difference, 1)} %`,
-    resistance: kNm(closed),
+    resistance: kNm(Mcr),
   })
+}
+
+/** Of the pieces between the restraints of a run the one that the closed form lets buckle first, as if it stood alone. */
+function weakestPiece(basics: Basics, of: CaseBasics, { from, to }: SegmentVerification): Piece {
+  const { x, prepared, total } = of
+  const knots = [...x.keys()].filter(i => x[i]! >= from && x[i]! <= to && (x[i] === from || x[i] === to || prepared.restrained[i] === 1))
+  const pieces = knots.slice(1).map((end, k): Piece => ({ from: x[knots[k]!]!, to: x[end]!, MEd: largestMoment(x, total, knots[k]!, end).value }))
+  const factorOf = (piece: Piece) => piece.MEd > 0 ? closedForm(basics, of, piece).Mcr / piece.MEd : Number.POSITIVE_INFINITY
+  return pieces.reduce((weakest, piece) => factorOf(piece) < factorOf(weakest) ? piece : weakest)
+}
+
+/** Beside the eigenvalue of a whole beam: the closed form of its weakest piece alone, which leaves out that the pieces help each other. */
+function pieceRows(basics: Basics, of: CaseBasics, run: SegmentVerification): SheetRow[] {
+  const piece = weakestPiece(basics, of, run)
+  const { C1, words, Mcr, zg } = closedForm(basics, of, piece)
+  const L = piece.to - piece.from
+  const uniform = criticalMomentUniform(basics.section, L)
+  const own = zg === 0 ? C1 : Mcr / uniform
+  const alone = Mcr * run.MEd / piece.MEd
+  const difference = 100 * (alone / run.Mcr! - 1)
+  return [
+    uniformMomentRow(basics.section, L, `Uniform moment on the piece from ${metres(piece.from)} to ${metres(piece.to)} m`),
+    row({
+      check: 'Closed form of that piece alone, for the eye',
+      expression: `M_{cr} = C_{1} M_{cr,0} M_{Ed} / M, ${QUARTER_POINTS}`,
+      substituted: `${num(own, 3)} × ${num(uniform / 1e6, 2)} × ${num(run.MEd / 1e6, 2)} / ${num(piece.MEd / 1e6, 2)}; ${words}`,
+      effect: `${difference >= 0 ? '+' : ''}${num(difference, 1)} %`,
+      resistance: kNm(alone),
+    }),
+  ]
 }
 
 function criticalRows(basics: Basics, of: CaseBasics, segment: SegmentVerification): SheetRow[] {
@@ -63,14 +103,17 @@ function criticalRows(basics: Basics, of: CaseBasics, segment: SegmentVerificati
   const raised = loadFactorC2(of, segment) > 0
   const height = !raised ? 'z_{g} = 0' : `z_{g} = +h/2 = ${num(basics.section.h / 2, 1)}`
   if (segment.C1 === null) {
-    return [row({
-      clause: '6.3.2.2(2)',
-      check: 'Elastic critical moment',
-      expression: 'M_{cr} = α_{cr} M_{Ed}',
-      substituted: `eigenvalue of the whole beam with its restraints, its own moments, ${height}: ${num(segment.Mcr! / segment.MEd, 4)} × ${num(segment.MEd / 1e6, 2)}`,
-      effect: `α_{cr} ${num(segment.Mcr! / segment.MEd, 4)}`,
-      resistance: kNm(segment.Mcr!),
-    })]
+    return [
+      row({
+        clause: '6.3.2.2(2)',
+        check: 'Elastic critical moment',
+        expression: 'M_{cr} = α_{cr} M_{Ed}',
+        substituted: `eigenvalue of the whole beam with its restraints, its own moments, ${height}: ${num(segment.Mcr! / segment.MEd, 4)} × ${num(segment.MEd / 1e6, 2)}`,
+        effect: `α_{cr} ${num(segment.Mcr! / segment.MEd, 4)}`,
+        resistance: kNm(segment.Mcr!),
+      }),
+      ...pieceRows(basics, of, segment),
+    ]
   }
   return [
     uniformMomentRow(basics.section, L, 'Uniform moment, for comparison'),

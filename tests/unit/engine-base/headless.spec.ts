@@ -40,6 +40,7 @@ describe('headless members', () => {
     ['a section that does not exist', [{ ...member, section: 'UB 1x1x1' }], 'unknown-section', '[0].section'],
     ['a grade not offered at that thickness', [{ ...member, section: 'UC 356x406x1299', nationalChoice: 'EN' }], 'out-of-range', '[0].grade'],
     ['a load that ends before its start', [{ ...member, line: [{ from: 5000, to: 4000, permanent: 1, variable: 1 }] }], 'invalid-value', '[0].line[0].to'],
+    ['a load on a stretch of a hair', [{ ...member, line: [{ from: 100, to: 100 + 1e-9, permanent: 1e5, variable: 0 }] }], 'empty-stretch', '[0].line[0].to'],
     ['a missing value', [{ ...member, grade: undefined }], 'invalid-value', '[0].grade'],
     ['no array', member, 'invalid-value', ''],
     ['a load of 1e308', [{ ...member, point: [{ at: 1, permanent: 1e308, variable: 0 }] }], 'invalid-value', '[0].point[0].permanent'],

@@ -126,6 +126,17 @@ describe('words of the sheet', () => {
     expect(temperature('6.10ab', 20, 1)).toEqual(['6.10a', expect.closeTo(expected(20, 1), 6)])
   })
 
+  it('shows beside a whole beam the closed form of its weakest piece alone, which is less', () => {
+    const rows = sheetOf(primary, 'UB 533x210x92', rulesOf({ criticalMoment: 'whole-beam' })).groups.flatMap(group => group.rows)
+    const value = (check: string) => (rows.find(row => row.check.startsWith(check))!.resistance as { value: number }).value
+    const alone = rows.find(row => row.check.startsWith('Closed form of that piece'))!
+    // the middle third under nearly uniform moment: C1 1.0
+    expect(rows.some(row => row.check === 'Uniform moment on the piece from 3.00 to 6.00 m')).toBe(true)
+    expect(Number(alone.substituted.split(' ')[0])).toBeCloseTo(1, 2)
+    expect(value('Closed form of that piece') / value('Elastic critical moment')).toBeLessThan(0.8)
+    expect(value('Closed form of that piece') / value('Elastic critical moment')).toBeGreaterThan(0.7)
+  })
+
   it('shows the rules of a tie where the beam serves as one', () => {
     const beam = beamOf(9000, { restraint: FREE })
     const tie = (context: { tieForce?: number }) => calculationSheet(beam, findSection('UB 254x102x22')!, 'S355', rulesOf(), { title: 'tie', ...context })

@@ -83,7 +83,7 @@ describe('an arrangement inside the range', () => {
     if (answer.kind !== 'inside') throw new Error('number 1 is in the range')
     const { rejected } = answer.arrangements[0]!
     expect(rejected?.rejection).toBe('depth-cap')
-    expect(rejected?.place).toMatch(/^[12AB+0-9. m]+ \/ [12AB]–[12AB] \(UB 127x76x13: \w+ \d+\.\d\d\)$/)
+    expect(rejected?.place).toMatch(/^[12AB+0-9. m]+ \/ [12AB]–[12AB] \(UB 127x76x13: [a-z -]+ \d+\.\d\d\)$/)
   })
 
   it('names what beats it by how much, and nothing for what lies on the trade-off line', () => {

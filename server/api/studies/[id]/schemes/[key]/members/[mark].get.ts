@@ -8,7 +8,7 @@ export default apiHandler(async (event) => {
   try {
     return memberSheet(prepared, row.key, getRouterParam(event, 'mark', { decode: true }) ?? '')
   } catch (error) {
-    if (error instanceof EngineError && error.code === 'unknown-reference') throw notFound('member')
+    if (error instanceof EngineError && error.code === 'unknown-reference') throw missing('member', 'scheme')
     throw error
   }
 })
