@@ -1,6 +1,6 @@
 const MM = 96 / 25.4
-/** A4 portrait within margins of 10 mm, less a hair for rounding. */
-const PAPER = { width: 190 * MM, height: 276 * MM }
+/** A4 portrait within margins of 10 mm, less half a millimetre for rounding. */
+const PAPER = { width: 190 * MM, height: 276.5 * MM }
 /** Type of the rows, pt: the largest that fits one page; what does not fit is set at the largest that reads well and breaks. */
 const TYPE = { largest: 8, least: 6.5, step: 0.1, broken: 7 }
 
@@ -33,17 +33,22 @@ function asOnPaper(measure: () => void) {
 /** Before a sheet is printed: its rows take the largest type with which all of it stands on one A4 page. */
 export function usePrintFit() {
   function fit() {
-    const { style } = document.documentElement
+    const { style, dataset } = document.documentElement
+    delete dataset.printBreaks
+    const set = (type: number) => style.setProperty('--print-type', type.toFixed(1))
     asOnPaper(() => {
-      const fits = (type: number) => {
-        style.setProperty('--print-type', type.toFixed(1))
-        return document.body.getBoundingClientRect().height <= PAPER.height
+      const steps = Math.round((TYPE.largest - TYPE.least) / TYPE.step)
+      for (let step = 0; step <= steps; step++) {
+        set(TYPE.largest - step * TYPE.step)
+        if (document.body.getBoundingClientRect().height <= PAPER.height) return
       }
-      let type = TYPE.largest
-      while (type > TYPE.least - TYPE.step / 2 && !fits(type)) type -= TYPE.step
-      if (type < TYPE.least - TYPE.step / 2) style.setProperty('--print-type', String(TYPE.broken))
+      set(TYPE.broken)
+      dataset.printBreaks = ''
     })
   }
   useEventListener('beforeprint', fit)
-  onUnmounted(() => document.documentElement.style.removeProperty('--print-type'))
+  onUnmounted(() => {
+    document.documentElement.style.removeProperty('--print-type')
+    delete document.documentElement.dataset.printBreaks
+  })
 }

@@ -1,7 +1,8 @@
 import type { H3Event } from 'h3'
-import { may, type ProjectAction } from '#shared/utils/permissions'
+import { may, mayEditPeople, type ProjectAction } from '#shared/utils/permissions'
 import type { ProjectRole } from '#shared/schemas/api'
 import type { Account } from '../database/queries/accounts'
+import { isOfPractice } from '../database/queries/people'
 import { findPlate } from '../database/queries/plates'
 import { findProjectAccess } from '../database/queries/projects'
 import { findScheme } from '../database/queries/schemes'
@@ -22,10 +23,13 @@ export function requireAccount(event: H3Event): Account {
   return account
 }
 
+/** Whether a text can be an id at all. */
+export const isId = (text: string | undefined): text is string => text !== undefined && UUID.test(text)
+
 /** A route parameter that is an id; what is none cannot exist. */
 function idOf(event: H3Event, what: string): string {
   const id = getRouterParam(event, 'id')
-  if (!id || !UUID.test(id)) throw notFound(what)
+  if (!isId(id)) throw notFound(what)
   return id
 }
 
@@ -48,6 +52,18 @@ async function accessTo(event: H3Event, projectId: string, what: string, actions
 /** For routes under /api/projects/:id. */
 export async function requireProject(event: H3Event, ...actions: ProjectAction[]): Promise<Access> {
   return await accessTo(event, idOf(event, 'project'), 'project', actions)
+}
+
+/** For routes under /api/projects/:id/people; `role` is null for an administrator who is not on the project. */
+export async function requirePeople(event: H3Event) {
+  const account = requireAccount(event)
+  const projectId = idOf(event, 'project')
+  const access = await findProjectAccess(useDb(), account.id, projectId)
+  const administers = account.isAdministrator && await isOfPractice(useDb(), projectId, account.practiceId)
+  if (!access && !administers) throw notFound('project')
+  const role = access?.role ?? null
+  if (role && !mayEditPeople(role, administers)) demand(role, ['people.edit'])
+  return { account, projectId, role }
 }
 
 /** For routes under /api/plates/:id: the plate in its present version too. */

@@ -10,6 +10,7 @@ const STATUS: Record<ApiErrorCode, [number, string]> = {
   'not-found': [404, 'Not Found'],
   'stale-version': [409, 'Conflict'],
   'cannot-be-framed': [422, 'Unprocessable Content'],
+  'last-engineer': [422, 'Unprocessable Content'],
   'too-many-tries': [429, 'Too Many Requests'],
   'internal': [500, 'Internal Server Error'],
   'not-ready': [503, 'Service Unavailable'],
@@ -31,4 +32,9 @@ export function notFound(what: string): H3Error {
 /** 404 for a part of what the asker may read. */
 export function missing(part: string, whole: string): H3Error {
   return refusal('not-found', `This ${whole} has no such ${part}.`)
+}
+
+/** A project keeps one engineer at least, or nobody could add another. */
+export function lastEngineer(): H3Error {
+  return refusal('last-engineer', 'This is the last scheme engineer of the project. Make another person scheme engineer first.')
 }

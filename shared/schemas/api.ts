@@ -9,6 +9,7 @@ import type { Direction, SchemeMember, StudyCounts } from './study'
 export const API_ERROR_CODES = [
   'malformed', 'not-signed-in', 'wrong-credentials', 'not-allowed', 'not-found', 'stale-version',
   'cannot-be-framed', 'too-many-tries', 'foreign-origin', 'not-ready', 'internal',
+  'last-engineer',
 ] as const
 export type ApiErrorCode = typeof API_ERROR_CODES[number]
 export interface ApiErrorBody { code: ApiErrorCode, message: string, path?: string }
@@ -35,6 +36,12 @@ export interface SessionAccount {
 export const NewProjectSchema = z.strictObject({
   number: z.string().trim().min(1).max(20),
   name: z.string().trim().min(1).max(120),
+})
+/** Puts an account of the practice on a project, or gives it another role there. */
+export const ProjectPersonSchema = z.strictObject({
+  email: z.string().trim().toLowerCase().max(254)
+    .pipe(z.email('This is not an e-mail address; write it as name@practice.example')),
+  role: ProjectRoleSchema,
 })
 export const NewPlateSchema = z.strictObject({ document: PlateSchema })
 export const SavePlateSchema = z.strictObject({ version: z.int().min(1), document: PlateSchema })
@@ -86,12 +93,15 @@ export interface StudySummary {
   finishedAt: string | null
 }
 
+/** Someone on a project; `id` is the account's. */
+export interface ProjectPerson { id: string, name: string, email: string, role: ProjectRole }
+
 export interface ProjectDetail {
   id: string
   number: string
   name: string
   role: ProjectRole
-  people: { name: string, email: string, role: ProjectRole }[]
+  people: ProjectPerson[]
   plates: PlateSummary[]
   studies: StudySummary[]
   basisVersion: number

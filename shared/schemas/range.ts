@@ -10,7 +10,9 @@ const BaysSchema = z.discriminatedUnion('kind', [
   z.strictObject({
     kind: z.literal('module'), module: z.int().min(50).max(20_000), min: bay, max: bay,
   }),
-], 'The bays are of kind fixed, equal or module.')
+], 'The bays are of kind fixed, equal or module.').refine(bays => bays.kind === 'fixed' || bays.min <= bays.max, {
+  message: 'The shortest bay is longer than the longest one.', path: ['min'],
+})
 
 const DirectionsSchema = z.array(z.enum(['x', 'y'])).min(1).max(2)
   .refine(list => new Set(list).size === list.length, 'A direction stands in the list twice.')

@@ -10,6 +10,7 @@ export const PROJECT_ACTIONS = [
   'basis.edit-allowances',
   'study.run',
   'study.cancel',
+  'people.edit',
 ] as const
 export type ProjectAction = typeof PROJECT_ACTIONS[number]
 
@@ -28,6 +29,14 @@ const TABLE: Record<ProjectRole, readonly ProjectAction[]> = {
 /** Whether a role may do that on its project. */
 export function may(role: ProjectRole, action: ProjectAction): boolean {
   return TABLE[role].includes(action)
+}
+
+/**
+ * Whether an account may say who is on a project and as what: an engineer of it, or an administrator of its
+ * practice, who need not be on it (`role` null).
+ */
+export function mayEditPeople(role: ProjectRole | null, isAdministrator: boolean): boolean {
+  return isAdministrator || (role !== null && may(role, 'people.edit'))
 }
 
 /** Whether an account of this role in the practice may make a project; being administrator alone is no engineering right. */

@@ -19,7 +19,7 @@ interface Row {
   /** A body that a narrower right does not cover is refused all the same. */
   narrow?: ProjectAction[]
 }
-interface Ids { project: string, plate: string, study: string, key: string, mark: string }
+interface Ids { project: string, plate: string, study: string, key: string, mark: string, person: string }
 
 /** Every route of the API has a line; a new route without one fails the first test. */
 const ROUTES: Row[] = [
@@ -34,6 +34,12 @@ const ROUTES: Row[] = [
     file: 'projects/[id]/studies.post', path: ids => `/api/projects/${ids.project}/studies`,
     body: ids => ({ plateId: ids.plate, range: drawnGrid }), actions: ['study.run'],
   },
+  {
+    file: 'projects/[id]/people/index.post', path: ids => `/api/projects/${ids.project}/people`,
+    body: () => ({ email: 'checker@demo.example', role: 'checker' }), actions: ['people.edit'],
+  },
+  // The engineer is the only one of the project, so that nobody is removed here.
+  { file: 'projects/[id]/people/[accountId].delete', path: ids => `/api/projects/${ids.project}/people/${ids.person}`, actions: ['people.edit'] },
   { file: 'plates/[id]/index.get', path: ids => `/api/plates/${ids.plate}`, actions: ['project.read'] },
   { file: 'plates/[id]/index.put', path: ids => `/api/plates/${ids.plate}`, body: () => ({ version: 999 }), actions: ['plate.edit', 'plate.edit-constraints'] },
   { file: 'plates/[id]/versions/index.get', path: ids => `/api/plates/${ids.plate}/versions`, actions: ['project.read'] },
@@ -85,7 +91,7 @@ beforeAll(async () => {
   const { body } = await engineer.get<SchemePage>(`/api/studies/${study}/schemes`)
   const key = body.rows[0]!.key
   const scheme = await engineer.get<{ members: { mark: string }[] }>(`/api/studies/${study}/schemes/${encodeURIComponent(key)}`)
-  ids = { project: office.id, plate: office.plates[0]!.id, study, key, mark: scheme.body.members[0]!.mark }
+  ids = { project: office.id, plate: office.plates[0]!.id, study, key, mark: scheme.body.members[0]!.mark, person: office.people.find(({ role }) => role === 'engineer')!.id }
   const { email, password } = await newAccount(databaseUrl, 'engineer')
   stranger = await signIn(url, email, password)
 })
@@ -106,7 +112,7 @@ describe('every route', () => {
   })
 
   it.each(ROUTES.filter(({ path, actions }) => actions && path({ ...emptyIds }).includes('none')))('$file answers 404 where there is no such thing', async (row) => {
-    const missing = { project: randomUUID(), plate: randomUUID(), study: randomUUID(), key: 'none', mark: 'none' }
+    const missing = { project: randomUUID(), plate: randomUUID(), study: randomUUID(), key: 'none', mark: 'none', person: randomUUID() }
     expect(await statusOf(people.get('engineer')!, row, missing)).toBe(404)
     expect(await statusOf(people.get('engineer')!, row, emptyIds)).toBe(404)
   })
@@ -123,7 +129,7 @@ describe('every route', () => {
   })
 })
 
-const emptyIds: Ids = { project: 'none', plate: 'none', study: 'none', key: 'none', mark: 'none' }
+const emptyIds: Ids = { project: 'none', plate: 'none', study: 'none', key: 'none', mark: 'none', person: 'none' }
 
 describe('making a project', () => {
   it.each(PROJECT_ROLES)('is the right of engineers: %s', async (role) => {

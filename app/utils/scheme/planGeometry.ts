@@ -54,6 +54,24 @@ export function planView(
   }
 }
 
+/** A drawing smaller than its sheet, moved to the middle of it; a larger one stays where it is. */
+export function centred(view: PlanView, sheet: { width: number, height: number }): PlanView {
+  const across = Math.max(0, sheet.width - view.width) / 2
+  const down = Math.max(0, sheet.height - view.height) / 2
+  return {
+    scale: view.scale,
+    width: view.width + across * 2,
+    height: view.height + down * 2,
+    x: mm => view.x(mm) + across,
+    y: mm => view.y(mm) + down,
+  }
+}
+
+/** Share of ink in a beam's line by its utilisation: half at 0.5 and below, full from 1.0. */
+export function inkShare(utilisation: number): number {
+  return Math.min(1, Math.max(0.5, utilisation))
+}
+
 export interface LineWeights {
   primary: number
   secondary: number
@@ -168,21 +186,37 @@ export function sizeLabel(beam: PlanBeam, segment: Segment, text: string, weight
   return { mark: beam.mark, text, turned, fontSize, x: x - off, y: y - Math.min(crowding, (length - width) / 2) }
 }
 
+interface Box { left: number, right: number, top: number, bottom: number }
+
 /** The box of a written size, px. */
-function labelBox(label: SizeLabel): { left: number, right: number, top: number, bottom: number } {
+function labelBox(label: SizeLabel): Box {
   const half = sizeWidth(label.text, label.fontSize) / 2
   return label.turned
     ? { left: label.x - label.fontSize, right: label.x + 2, top: label.y - half, bottom: label.y + half }
     : { left: label.x - half, right: label.x + half, top: label.y - label.fontSize, bottom: label.y + 2 }
 }
 
-/** Sizes in the order of their importance without those that would run over an earlier one. */
-export function withoutOverlap<T extends SizeLabel>(labels: readonly T[]): T[] {
-  const kept: { label: T, box: ReturnType<typeof labelBox> }[] = []
+function overlap(a: Box, b: Box): boolean {
+  return a.right > b.left && a.left < b.right && a.bottom > b.top && a.top < b.bottom
+}
+
+/**
+ * Sizes in the order of their importance without those that would run over an earlier one or along the
+ * line of another beam; a line across is cut by the knocked-out ground. The one of mark `always` is
+ * written whatever lies beneath.
+ */
+export function withoutOverlap<T extends SizeLabel>(
+  labels: readonly T[], lines: readonly { mark: string, segment: Segment }[] = [], always: string | null = null,
+): T[] {
+  const boxes = lines.map(({ mark, segment: { x1, y1, x2, y2 } }) => ({
+    mark, turned: Math.abs(y2 - y1) > Math.abs(x2 - x1),
+    box: { left: Math.min(x1, x2) - 0.5, right: Math.max(x1, x2) + 0.5, top: Math.min(y1, y2) - 0.5, bottom: Math.max(y1, y2) + 0.5 },
+  }))
+  const kept: { label: T, box: Box }[] = []
   for (const label of labels) {
     const box = labelBox(label)
-    const isFree = kept.every(({ box: other }) =>
-      box.right <= other.left || box.left >= other.right || box.bottom <= other.top || box.top >= other.bottom)
+    const isFree = label.mark === always || (kept.every(({ box: other }) => !overlap(box, other))
+      && boxes.every(line => line.mark === label.mark || line.turned !== label.turned || !overlap(box, line.box)))
     if (isFree) kept.push({ label, box })
   }
   return kept.map(({ label }) => label)

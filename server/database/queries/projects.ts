@@ -88,7 +88,7 @@ export async function findProject(db: Db, accountId: string, projectId: string):
   const [project, people, plates, studies, basis] = await Promise.all([
     db.selectFrom('projects').select(['id', 'number', 'name']).where('id', '=', projectId).executeTakeFirstOrThrow(),
     db.selectFrom('project_members as member').innerJoin('accounts as account', 'account.id', 'member.account_id')
-      .select(['account.name', 'account.email', 'member.role'])
+      .select(['account.id', 'account.name', 'account.email', 'member.role'])
       .where('member.project_id', '=', projectId).orderBy('member.added_at').orderBy('account.name').execute(),
     listPlates(db, projectId),
     listStudies(db, projectId),

@@ -85,7 +85,13 @@ function middle(box: Rectangle): [number, number] {
 
 function voidProblems(model: PlateModel): PlateProblem[] {
   const problems: PlateProblem[] = []
-  model.voids.forEach(({ name, box }, i) => {
+  const { storeys } = model.plate
+  model.voids.forEach(({ name, box, floors }, i) => {
+    if (floors > storeys) {
+      problems.push({
+        code: 'void', path: `voids[${i}].floors`, at: middle(box), message: `Void ${name} repeats on ${floors} floors; the building has ${storeys}.`,
+      })
+    }
     if (coveredArea(model.outline, box) < areaOf(box) * (1 - 1e-12)) {
       problems.push({
         code: 'void', path: `voids[${i}]`, at: middle(box), message: `${called('Void', name)} reaches outside the outline. Draw it within the slab.`,

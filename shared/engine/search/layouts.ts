@@ -97,17 +97,24 @@ function equalInterval(bays: { min: number, max: number }, from: number, to: num
 function moduleInterval(bays: { module: number, min: number, max: number }, from: number, to: number): Interval {
   const length = to - from
   const families: Family[] = []
+  let count = 0
+  const add = (family: Family) => {
+    families.push(family)
+    count += family.count
+  }
   const first = Math.ceil(bays.min / bays.module) * bays.module
   for (let a = first; a <= bays.max; a += bays.module) {
-    if (length % a === 0) families.push({ a, b: a, p: length / a, q: 0, count: 1 })
+    if (length % a === 0) add({ a, b: a, p: length / a, q: 0, count: 1 })
     for (let b = a + bays.module; b <= bays.max; b += bays.module) {
       for (let p = 1; p * a < length; p++) {
         const rest = length - p * a
-        if (rest % b === 0) families.push({ a, b, p, q: rest / b, count: binomial(p + rest / b, p) })
+        if (rest % b === 0) add({ a, b, p, q: rest / b, count: binomial(p + rest / b, p) })
       }
+      // Beyond exact counting the rest decides nothing: the range is refused.
+      if (count > LARGEST_COUNT) return { kind: 'module', from, to, families, count }
     }
   }
-  return { kind: 'module', from, to, families, count: families.reduce((sum, family) => sum + family.count, 0) }
+  return { kind: 'module', from, to, families, count }
 }
 
 function binomial(n: number, k: number): number {
