@@ -144,7 +144,7 @@ describe('workers', () => {
     // Some 0.2 s on a quiet machine; the study itself would go on for minutes.
     expect(told.at(-1)!.at - asked).toBeLessThan(10_000)
     await wait(1000)
-    expect(await waitingJobs()).toBe(0)
+    expect(await waitingJobs(study.id)).toBe(0)
     const { body: later } = await engineer.get<StudyRecord>(`/api/studies/${study.id}`)
     expect(later).toMatchObject({ state: 'cancelled', progress: { examined: told.at(-1)!.progress.examined } })
   })
@@ -202,8 +202,9 @@ async function query<T extends pg.QueryResultRow>(text: string): Promise<T[]> {
   }
 }
 
-async function waitingJobs(): Promise<number> {
-  const [row] = await query<{ count: string }>(`select count(*) from pgboss.job where state < 'completed' and name = '${STUDY_QUEUE}'`)
+/** Jobs of a study that are not done. Those of earlier tests may still wait for their expiry. */
+async function waitingJobs(studyId: string): Promise<number> {
+  const [row] = await query<{ count: string }>(`select count(*) from pgboss.job where state < 'completed' and name = '${STUDY_QUEUE}' and data ->> 'studyId' = '${studyId}'`)
   return Number(row?.count)
 }
 
