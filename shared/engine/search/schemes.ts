@@ -7,7 +7,7 @@ import type { NumberedArrangement } from './arrangements'
 import { sizeCoupled } from './coupled'
 import { type PreparedStudy, frameOf } from './prepare'
 import {
-  type Caps, NO_CAPS, type PreparedFrame, type SizedFrame, equilibriumResidual, isUnsized, prepareFrame, sizeFrame,
+  type Caps, NO_CAPS, type PreparedFrame, type SizedFrame, capOf, equilibriumResidual, isUnsized, prepareFrame, sizeFrame,
 } from './sizedFrame'
 
 export interface Scheme {
@@ -39,17 +39,22 @@ export function frameForSizing(study: PreparedStudy, arrangement: NumberedArrang
 export function sizeScheme(
   study: PreparedStudy, arrangement: NumberedArrangement, prepared: PreparedFrame, depthCap: number | null,
 ): Scheme | NoScheme {
-  const sized = sizeCoupled(prepared, study.sizer, capsUnder(study.caps, depthCap))
+  const caps = capsUnder(study.caps, depthCap)
+  const sized = sizeCoupled(prepared, study.sizer, caps)
   if ('coupled' in sized) return { rejection: 'buildability', detail: sized.coupled }
-  if (isUnsized(sized)) return unsized(study, prepared, depthCap, noSectionWords(prepared.frame.beams[sized.beam]!.kind))
+  if (isUnsized(sized)) {
+    const beam = prepared.frame.beams[sized.beam]!
+    return unsized(study, prepared, depthCap, noSectionWords(beam.kind), noSectionWords(beam.kind, capOf(beam, caps)))
+  }
   const columns = sizeColumns(study, prepared, sized)
   if (!columns) return unsized(study, prepared, depthCap, 'No section passes for a column.')
   return completeScheme(study, arrangement, prepared, depthCap, sized, columns)
 }
 
-function noSectionWords(kind: string): string {
+function noSectionWords(kind: string, cap = Infinity): string {
   const piece = kind === 'trimmer' ? kind : `${kind} beam`
-  return `No section passes for ${kind === 'edge' ? 'an' : 'a'} ${piece}.`
+  const depth = cap === Infinity ? '' : ` up to ${cap} mm deep`
+  return `No section${depth} passes for ${kind === 'edge' ? 'an' : 'a'} ${piece}.`
 }
 
 /** The scheme of sized beams and columns, with its mass; it must be in equilibrium. */
@@ -70,9 +75,9 @@ export function completeScheme(
  * The reason where sections are missing: `depth-cap` if they are not without a cap, `buildability` if
  * the flange width alone leaves none, else `no-section`. A cap beside the range's is to blame itself.
  */
-function unsized(study: PreparedStudy, prepared: PreparedFrame, depthCap: number | null, detail: string): NoScheme {
-  if (depthCap !== null) return { rejection: 'depth-cap', detail }
-  if (isSizedFreely(study, prepared, prepared.needs)) return { rejection: 'depth-cap', detail }
+function unsized(study: PreparedStudy, prepared: PreparedFrame, depthCap: number | null, detail: string, underCap = detail): NoScheme {
+  if (depthCap !== null) return { rejection: 'depth-cap', detail: underCap }
+  if (isSizedFreely(study, prepared, prepared.needs)) return { rejection: 'depth-cap', detail: underCap }
   if (study.input.basis.buildability.minFlangeWidth === null) return { rejection: 'no-section', detail }
   const narrow = prepared.needs.map(need => ({ ...need, flangeWidth: 0 }))
   return isSizedFreely(study, prepared, narrow)

@@ -50,7 +50,7 @@ describe('study without the server', () => {
   it('names the member that no section under the cap can carry, and by how much', () => {
     const { schemes, leftOut } = study(oneBay({ depthCap: 120, divisions: [1] }))
     expect(schemes).toEqual([])
-    expect(leftOut[0]).toMatchObject({ rejection: 'depth-cap', detail: 'No section passes for an edge beam.' })
+    expect(leftOut[0]).toMatchObject({ rejection: 'depth-cap', detail: 'No section up to 120 mm deep passes for an edge beam.' })
     expect(leftOut[0]!.place).toMatch(/^A \/ 1–2 \(IPE 120: [a-z -]+ \d+\.\d\d\)$/)
   })
 })
